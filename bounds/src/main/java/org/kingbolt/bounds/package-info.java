@@ -1,0 +1,5 @@
+/** Bounds on the reliability of coherent systems. */
+@NullMarked
+package org.kingbolt.bounds;
+
+import org.jspecify.annotations.NullMarked;

@@ -1,0 +1,67 @@
+package org.kingbolt.core;
+
+import java.util.Collection;
+import java.util.List;
+import java.util.Objects;
+
+/** The argument checks of this package and their messages. */
+final class Check {
+
+  private static final int SHOWN = 12;
+
+  private Check() {}
+
+  /** A number from 0 to 1; negative zero becomes zero. */
+  static double probability(double value, String what) {
+    if (!(value >= 0 && value <= 1)) {
+      throw new IllegalArgumentException(
+          what + " is " + value + "; it must be a number from 0 to 1");
+    }
+    return value + 0.0;
+  }
+
+  /** A component's name: not null, not blank. */
+  static String name(String name, String where) {
+    Objects.requireNonNull(name, () -> where + ": a name is null; give every component a name");
+    if (name.isBlank()) {
+      throw new IllegalArgumentException(
+          where + ": a name is " + quoted(name) + "; it must have at least one visible character");
+    }
+    return name;
+  }
+
+  static <T> T notNull(T value, String what) {
+    return Objects.requireNonNull(value, () -> what + " is null");
+  }
+
+  /** The complaint about a name that the structure does not have. */
+  static IllegalArgumentException unknown(String name, Collection<String> known) {
+    return new IllegalArgumentException(
+        "unknown component "
+            + quoted(name)
+            + nearest(name, known)
+            + "; the components are "
+            + listed(known));
+  }
+
+  private static String nearest(String name, Collection<String> known) {
+    return known.stream()
+        .filter(candidate -> candidate.strip().equalsIgnoreCase(name.strip()))
+        .findFirst()
+        .map(candidate -> " (did you mean " + quoted(candidate) + "?)")
+        .orElse("");
+  }
+
+  /** The first few names, quoted, and how many more there are. */
+  static String listed(Collection<String> names) {
+    List<String> shown = names.stream().limit(SHOWN).map(Check::quoted).toList();
+    String text = String.join(", ", shown);
+    return names.size() > SHOWN
+        ? text + " and " + (names.size() - SHOWN) + " more"
+        : text.isEmpty() ? "none" : text;
+  }
+
+  static String quoted(String name) {
+    return "\"" + name + "\"";
+  }
+}

@@ -1,0 +1,6 @@
+package org.kingbolt.core;
+
+/** Placeholder. */
+public final class Derivation {
+  private Derivation() {}
+}

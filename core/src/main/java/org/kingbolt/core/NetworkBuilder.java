@@ -1,0 +1,299 @@
+package org.kingbolt.core;
+
+import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.LinkedHashMap;
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.Map;
+import java.util.Set;
+import org.kingbolt.core.NetworkStructure.Link;
+import org.kingbolt.core.NetworkStructure.Question;
+
+/**
+ * Describes a network link by link, and ends with the question what it must connect.
+ *
+ * <p>Nodes come into being by being named; they work unless {@link #node(String, String)} says what
+ * their working depends on. A link joins two nodes both ways, an arc leads one way. One component
+ * may stand on several links and nodes: when it fails, all of them fail together.
+ *
+ * <p>Not safe for use by several threads; the structures made are. A builder may go on after a
+ * question has been asked of it.
+ *
+ * <p>Example: {@code network().link("L1", "a", "b").link("L2", "b", "c").connecting("a", "c")}.
+ */
+public final class NetworkBuilder {
+
+  private final List<Link> links = new ArrayList<>();
+  private final List<Structure> linkParts = new ArrayList<>();
+  private final Map<String, Structure> nodeParts = new LinkedHashMap<>();
+  private final Set<String> nodes = new LinkedHashSet<>();
+
+  NetworkBuilder() {}
+
+  /**
+   * Adds a link that can be passed both ways.
+   *
+   * @param component the component it depends on
+   * @param a one node
+   * @param b the other node
+   * @return this builder
+   * @throws IllegalArgumentException if a name is blank or both nodes are the same
+   */
+  public NetworkBuilder link(String component, String a, String b) {
+    return link(Structure.component(component), a, b);
+  }
+
+  /**
+   * Adds a link that can be passed both ways and works while a structure works.
+   *
+   * @param part what it depends on
+   * @param a one node
+   * @param b the other node
+   * @return this builder
+   * @throws IllegalArgumentException if a name is blank, both nodes are the same, or the structure
+   *     has no components
+   */
+  public NetworkBuilder link(Structure part, String a, String b) {
+    return add(requirePart(part, a, b), new Link(a, b, false, false));
+  }
+
+  /**
+   * Adds an arc, which can be passed one way.
+   *
+   * @param component the component it depends on
+   * @param from the node where it starts
+   * @param to the node where it ends
+   * @return this builder
+   * @throws IllegalArgumentException if a name is blank or both nodes are the same
+   */
+  public NetworkBuilder arc(String component, String from, String to) {
+    return arc(Structure.component(component), from, to);
+  }
+
+  /**
+   * Adds an arc, which can be passed one way and works while a structure works.
+   *
+   * @param part what it depends on
+   * @param from the node where it starts
+   * @param to the node where it ends
+   * @return this builder
+   * @throws IllegalArgumentException if a name is blank, both nodes are the same, or the structure
+   *     has no components
+   */
+  public NetworkBuilder arc(Structure part, String from, String to) {
+    return add(requirePart(part, from, to), new Link(from, to, true, false));
+  }
+
+  /**
+   * Adds a link that cannot fail.
+   *
+   * @param a one node
+   * @param b the other node
+   * @return this builder
+   * @throws IllegalArgumentException if a name is blank or both nodes are the same
+   */
+  public NetworkBuilder perfectLink(String a, String b) {
+    return add(ConstantStructure.ALWAYS, new Link(a, b, false, true));
+  }
+
+  /**
+   * Adds an arc that cannot fail.
+   *
+   * @param from the node where it starts
+   * @param to the node where it ends
+   * @return this builder
+   * @throws IllegalArgumentException if a name is blank or both nodes are the same
+   */
+  public NetworkBuilder perfectArc(String from, String to) {
+    return add(ConstantStructure.ALWAYS, new Link(from, to, true, true));
+  }
+
+  /**
+   * Says that a node works while a component works.
+   *
+   * @param node the node
+   * @param component the component it depends on
+   * @return this builder
+   * @throws IllegalArgumentException if a name is blank
+   * @throws IllegalStateException if this was already said of the node
+   */
+  public NetworkBuilder node(String node, String component) {
+    return node(node, Structure.component(component));
+  }
+
+  /**
+   * Says that a node works while a structure works.
+   *
+   * @param node the node
+   * @param part what it depends on
+   * @return this builder
+   * @throws IllegalArgumentException if the name is blank or the structure has no components
+   * @throws IllegalStateException if this was already said of the node
+   */
+  public NetworkBuilder node(String node, Structure part) {
+    Check.name(node, "network node");
+    GateStructure.requireComponents("node " + Check.quoted(node), Check.notNull(part, "part"));
+    Structure before = nodeParts.get(node);
+    if (before != null) {
+      throw new IllegalStateException(
+          "node "
+              + Check.quoted(node)
+              + " already depends on "
+              + TextWriter.excerpt(before)
+              + "; a node that needs both takes Structure.series of the two");
+    }
+    nodes.add(node);
+    nodeParts.put(node, part);
+    return this;
+  }
+
+  /**
+   * Asks for a connection: two names make a two-terminal question, more a k-terminal one. With
+   * arcs, routes lead from the first name to each of the others.
+   *
+   * @param terminals at least two different nodes of this network
+   * @return the structure that works while they are connected, the terminals themselves working
+   * @throws IllegalArgumentException if there are fewer than two names, or one is unknown or
+   *     repeated
+   * @throws NotCoherentException if they are not connected even when everything works, or always
+   *     are
+   */
+  public Structure connecting(String... terminals) {
+    Check.notNull(terminals, "connecting: the list of nodes");
+    return structure(Question.CONNECTING, requireTerminals("connecting", 2, terminals));
+  }
+
+  /**
+   * Asks for all-terminal connection: every node reaches every other.
+   *
+   * @return the structure that works while all nodes work and are connected
+   * @throws IllegalArgumentException if there are arcs, with which the question has two meanings,
+   *     or fewer than two nodes
+   * @throws NotCoherentException if they are not connected even when everything works, or always
+   *     are
+   */
+  public Structure connectingAll() {
+    if (links.stream().anyMatch(Link::arc)) {
+      throw new IllegalArgumentException(
+          "connectingAll: the network has arcs; say where routes start with"
+              + " reachingAllFrom(source)");
+    }
+    if (nodes.size() < 2) {
+      throw new IllegalArgumentException(
+          "connectingAll: the network has " + nodes.size() + " nodes; at least two are needed");
+    }
+    return structure(Question.ALL, List.copyOf(nodesInText()));
+  }
+
+  /**
+   * Asks that every node can be reached from one of them.
+   *
+   * @param source the node where all routes start
+   * @return the structure that works while all nodes work and are reached
+   * @throws IllegalArgumentException if the source is unknown or the only node
+   * @throws NotCoherentException if they are not reached even when everything works, or always are
+   */
+  public Structure reachingAllFrom(String source) {
+    requireTerminals("reachingAllFrom", 1, source);
+    if (nodes.size() < 2) {
+      throw new IllegalArgumentException(
+          "reachingAllFrom: the network has no node besides " + Check.quoted(source));
+    }
+    Set<String> order = new LinkedHashSet<>();
+    order.add(source);
+    order.addAll(nodesInText());
+    return structure(Question.ALL_FROM, List.copyOf(order));
+  }
+
+  /** The nodes in order of their first mention in the text form: links, then failing nodes. */
+  private Set<String> nodesInText() {
+    Set<String> order = new LinkedHashSet<>();
+    for (Link link : links) {
+      order.add(link.from());
+      order.add(link.to());
+    }
+    order.addAll(nodeParts.keySet());
+    return order;
+  }
+
+  private NetworkBuilder add(Structure part, Link link) {
+    Check.name(link.from(), "network node");
+    Check.name(link.to(), "network node");
+    if (link.from().equals(link.to())) {
+      throw new IllegalArgumentException(
+          (link.arc() ? "arc" : "link")
+              + " from "
+              + Check.quoted(link.from())
+              + " to itself; it connects nothing, so leave it out");
+    }
+    nodes.add(link.from());
+    nodes.add(link.to());
+    links.add(link);
+    if (!link.perfect()) {
+      linkParts.add(part);
+    }
+    return this;
+  }
+
+  private static Structure requirePart(Structure part, String from, String to) {
+    GateStructure.requireComponents("link from " + from + " to " + to, Check.notNull(part, "part"));
+    return part;
+  }
+
+  private List<String> requireTerminals(String question, int fewest, String... terminals) {
+    Set<String> distinct = new LinkedHashSet<>();
+    for (String terminal : terminals) {
+      Check.name(terminal, question);
+      if (!nodes.contains(terminal)) {
+        throw new IllegalArgumentException(
+            question
+                + ": "
+                + Check.quoted(terminal)
+                + " is not a node of the network; the nodes are "
+                + Check.listed(nodes));
+      }
+      if (!distinct.add(terminal)) {
+        throw new IllegalArgumentException(
+            question + ": " + Check.quoted(terminal) + " is listed twice; list every node once");
+      }
+    }
+    if (distinct.size() < fewest) {
+      throw new IllegalArgumentException(
+          question
+              + ": "
+              + distinct.size()
+              + " nodes are named in "
+              + Arrays.toString(terminals)
+              + "; at least "
+              + fewest
+              + " are needed");
+    }
+    return List.copyOf(distinct);
+  }
+
+  private Structure structure(Question question, List<String> terminals) {
+    List<Structure> parts = new ArrayList<>(linkParts);
+    parts.addAll(nodeParts.values());
+    NetworkStructure network =
+        new NetworkStructure(
+            List.copyOf(links), List.copyOf(nodeParts.keySet()), question, terminals, false, parts);
+    boolean[] states = new boolean[parts.size()];
+    if (network.evaluate(states)) {
+      throw new NotCoherentException(
+          "network: "
+              + Check.listed(terminals)
+              + " are connected by links that cannot fail, so the structure always works");
+    }
+    Arrays.fill(states, true);
+    if (!network.evaluate(states)) {
+      throw new NotCoherentException(
+          "network: there is no route from "
+              + Check.quoted(terminals.get(0))
+              + " to "
+              + network.firstUnreached()
+              + ", even when everything works; add the missing link");
+    }
+    return network;
+  }
+}

@@ -1,0 +1,143 @@
+package org.kingbolt.core.diagram;
+
+import java.util.Arrays;
+
+/**
+ * What is known of an expression before it is built: the level of each variable, the deepest level
+ * each sub-expression uses, and which operators have parts that share something ("knots").
+ *
+ * <p>One depth-first pass with an explicit stack. Two uses of one thing are found to lie in
+ * different parts of the deepest operator on the stack that was already open at the earlier use.
+ */
+final class ExpressionOrder {
+
+  private final Composer composer;
+  private final int[] variableAtLevel;
+  private final int[] level;
+  private final int[] deepest;
+  private final boolean[] knot;
+  private int levels;
+
+  private ExpressionOrder(Composer composer) {
+    this.composer = composer;
+    this.variableAtLevel = new int[composer.variables()];
+    this.level = new int[composer.variables()];
+    Arrays.fill(level, -1);
+    this.deepest = new int[composer.count()];
+    this.knot = new boolean[composer.count()];
+  }
+
+  static ExpressionOrder depthFirst(Composer composer) {
+    ExpressionOrder order = new ExpressionOrder(composer);
+    order.visit();
+    for (int variable = 0; variable < composer.variables(); variable++) {
+      order.place(variable);
+    }
+    order.measure();
+    return order;
+  }
+
+  static ExpressionOrder given(Composer composer, int[] variables) {
+    ExpressionOrder order = new ExpressionOrder(composer);
+    for (int variable : variables) {
+      order.place(variable);
+    }
+    order.visit();
+    order.measure();
+    return order;
+  }
+
+  private void place(int variable) {
+    if (level[variable] < 0) {
+      level[variable] = levels;
+      variableAtLevel[levels++] = variable;
+    }
+  }
+
+  /** Depth-first: places variables at their first use and finds the knots. */
+  private void visit() {
+    int expressions = composer.count();
+    int[] lastUse = new int[expressions];
+    int[] lastVariableUse = new int[composer.variables()];
+    boolean[] expanded = new boolean[expressions];
+    int[] open = new int[64];
+    int[] nextLevel = new int[64];
+    int[] opened = new int[64];
+    int depth = 0;
+    int clock = 0;
+    int arriving = expressions - 1;
+    while (true) {
+      if (arriving >= 0) {
+        clock++;
+        int[] uses = composer.isLeaf(arriving) ? lastVariableUse : lastUse;
+        int thing = composer.isLeaf(arriving) ? composer.variableOf(arriving) : arriving;
+        if (uses[thing] > 0) {
+          knot[open[deepestOpenBefore(opened, depth, uses[thing])]] = true;
+        }
+        uses[thing] = clock;
+        if (composer.isLeaf(arriving)) {
+          place(thing);
+        } else if (!expanded[arriving]) {
+          expanded[arriving] = true;
+          if (depth == open.length) {
+            open = Arrays.copyOf(open, depth << 1);
+            nextLevel = Arrays.copyOf(nextLevel, depth << 1);
+            opened = Arrays.copyOf(opened, depth << 1);
+          }
+          open[depth] = arriving;
+          nextLevel[depth] = 0;
+          opened[depth] = clock;
+          depth++;
+        }
+      }
+      if (depth == 0) {
+        return;
+      }
+      int operator = open[depth - 1];
+      if (nextLevel[depth - 1] < composer.template(operator).levels()) {
+        arriving = composer.partAt(operator, nextLevel[depth - 1]++);
+      } else {
+        depth--;
+        arriving = -1;
+      }
+    }
+  }
+
+  /** Index of the deepest open operator that was opened no later than a moment. */
+  private static int deepestOpenBefore(int[] opened, int depth, int moment) {
+    int at = Arrays.binarySearch(opened, 0, depth, moment);
+    return at >= 0 ? at : -at - 2;
+  }
+
+  private void measure() {
+    for (int expression = 0; expression < composer.count(); expression++) {
+      if (composer.isLeaf(expression)) {
+        deepest[expression] = level[composer.variableOf(expression)];
+      } else {
+        int most = -1;
+        for (int l = composer.template(expression).levels() - 1; l >= 0; l--) {
+          most = Math.max(most, deepest[composer.partAt(expression, l)]);
+        }
+        deepest[expression] = most;
+      }
+    }
+  }
+
+  int levelOf(int variable) {
+    return level[variable];
+  }
+
+  /** Deepest level that the expression reads. */
+  int deepest(int expression) {
+    return deepest[expression];
+  }
+
+  /** Whether two parts of this operator share a variable or an operator. */
+  boolean isKnot(int expression) {
+    return knot[expression];
+  }
+
+  int[] variableAtLevel() {
+    return variableAtLevel;
+  }
+}

@@ -1,0 +1,194 @@
+package org.kingbolt.core.diagram;
+
+import java.util.Arrays;
+
+/**
+ * The sweep over a network as a list of operations on the frontier: a node enters, a link is met, a
+ * node leaves because its last link has been met. Entering nodes and links that have a slot are the
+ * decisions; the rest happens by itself.
+ */
+final class FrontierPlan {
+
+  static final int ENTER = 0;
+  static final int LINK = 1;
+  static final int LEAVE = 2;
+
+  final NetworkProblem problem;
+
+  /** Kind and argument (node or link) of each operation. */
+  private final int[] kind;
+
+  private final int[] argument;
+
+  /** Operation with which each node enters and leaves. */
+  private final int[] entering;
+
+  private final int[] leaving;
+
+  /** Terminals that enter at or after each operation. */
+  private final int[] terminalsLeft;
+
+  /** Operation of each decision, and the frontier's nodes before it in order of entry. */
+  private final int[] decision;
+
+  private final int[][] frontier;
+
+  private final int operations;
+
+  FrontierPlan(NetworkProblem problem) {
+    this.problem = problem;
+    int[] links = linksInOrder(problem, FrontierOrder.best(problem));
+    int capacity = links.length + 2 * problem.nodes();
+    this.kind = new int[capacity];
+    this.argument = new int[capacity];
+    this.entering = new int[problem.nodes()];
+    this.leaving = new int[problem.nodes()];
+    this.operations = listOperations(links);
+    this.terminalsLeft = new int[operations + 1];
+    for (int op = operations - 1; op >= 0; op--) {
+      boolean enters = kind[op] == ENTER && problem.terminal(argument[op]);
+      terminalsLeft[op] = terminalsLeft[op + 1] + (enters ? 1 : 0);
+    }
+    int[] found = new int[operations];
+    int count = 0;
+    for (int op = 0; op < operations; op++) {
+      if (slotOf(op) != NetworkProblem.PERFECT) {
+        found[count++] = op;
+      }
+    }
+    this.decision = Arrays.copyOf(found, count);
+    this.frontier = frontiers();
+  }
+
+  /** Each link when the later of its two nodes is met, links to earlier nodes first. */
+  private static int[] linksInOrder(NetworkProblem problem, int[] nodeOrder) {
+    int[] position = new int[problem.nodes()];
+    Arrays.fill(position, -1);
+    for (int i = 0; i < nodeOrder.length; i++) {
+      position[nodeOrder[i]] = i;
+    }
+    long[] keys = new long[problem.links()];
+    int count = 0;
+    for (int link = 0; link < problem.links(); link++) {
+      int a = position[problem.from[link]];
+      int b = position[problem.to[link]];
+      if (a >= 0) {
+        // later end, then earlier end, then number: 21 bits each
+        keys[count++] = ((long) Math.max(a, b) << 42) | ((long) Math.min(a, b) << 21) | link;
+      }
+    }
+    Arrays.sort(keys, 0, count);
+    int[] links = new int[count];
+    for (int i = 0; i < count; i++) {
+      links[i] = (int) (keys[i] & ((1 << 21) - 1));
+    }
+    return links;
+  }
+
+  private int listOperations(int[] links) {
+    int[] left = new int[problem.nodes()];
+    for (int link : links) {
+      left[problem.from[link]]++;
+      left[problem.to[link]]++;
+    }
+    boolean[] entered = new boolean[problem.nodes()];
+    int op = 0;
+    for (int link : links) {
+      int[] ends = {problem.from[link], problem.to[link]};
+      for (int node : ends) {
+        if (!entered[node]) {
+          entered[node] = true;
+          kind[op] = ENTER;
+          entering[node] = op;
+          argument[op++] = node;
+        }
+      }
+      kind[op] = LINK;
+      argument[op++] = link;
+      for (int node : ends) {
+        if (--left[node] == 0) {
+          kind[op] = LEAVE;
+          leaving[node] = op;
+          argument[op++] = node;
+        }
+      }
+    }
+    return op;
+  }
+
+  private int[][] frontiers() {
+    int[][] result = new int[decision.length][];
+    int[] active = new int[problem.nodes()];
+    int count = 0;
+    int next = 0;
+    for (int op = 0; op < operations; op++) {
+      if (next < decision.length && decision[next] == op) {
+        result[next++] = Arrays.copyOf(active, count);
+      }
+      if (kind[op] == ENTER) {
+        active[count++] = argument[op];
+      } else if (kind[op] == LEAVE) {
+        count = remove(active, count, argument[op]);
+      }
+    }
+    return result;
+  }
+
+  /** Removes a node from a list, keeping the order of the others; returns the new length. */
+  static int remove(int[] active, int count, int node) {
+    int at = 0;
+    while (active[at] != node) {
+      at++;
+    }
+    System.arraycopy(active, at + 1, active, at, count - at - 1);
+    return count - 1;
+  }
+
+  int operations() {
+    return operations;
+  }
+
+  int kind(int op) {
+    return kind[op];
+  }
+
+  int argument(int op) {
+    return argument[op];
+  }
+
+  int enteringOf(int node) {
+    return entering[node];
+  }
+
+  int leavingOf(int node) {
+    return leaving[node];
+  }
+
+  boolean allTerminalsMetBefore(int op) {
+    return terminalsLeft[op] == 0;
+  }
+
+  int decisions() {
+    return decision.length;
+  }
+
+  int operationOf(int step) {
+    return decision[step];
+  }
+
+  int[] frontierBefore(int step) {
+    return frontier[step];
+  }
+
+  int slot(int step) {
+    return slotOf(decision[step]);
+  }
+
+  private int slotOf(int op) {
+    return switch (kind[op]) {
+      case ENTER -> problem.nodeSlot[argument[op]];
+      case LINK -> problem.linkSlot[argument[op]];
+      default -> NetworkProblem.PERFECT;
+    };
+  }
+}

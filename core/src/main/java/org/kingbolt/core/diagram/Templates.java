@@ -1,0 +1,168 @@
+package org.kingbolt.core.diagram;
+
+import java.util.BitSet;
+import java.util.List;
+
+/**
+ * The diagrams of the plain operators over numbered slots: gates, weighted and consecutive forms,
+ * set families and truth tables. A {@link Composer} puts parts into the slots.
+ *
+ * <p>Stateless. The results need not be reduced; the composer reduces.
+ */
+public final class Templates {
+
+  private Templates() {}
+
+  /**
+   * A function of nothing.
+   *
+   * @param works its value
+   * @return a diagram without levels
+   */
+  public static Diagram constant(boolean works) {
+    return Diagram.constant(works);
+  }
+
+  /**
+   * k-out-of-n:G. Series is {@code atLeast(n, n)}, parallel is {@code atLeast(1, n)}.
+   *
+   * @param k from 1 to n
+   * @param n the number of slots
+   * @param meter hears of every node
+   * @return a template with {@code k (n - k + 1)} nodes; time is linear in that
+   */
+  public static Diagram atLeast(int k, int n, WorkMeter meter) {
+    if (k == 1 || k == n) {
+      return Layers.chain(n, k == n);
+    }
+    Layers layers = new Layers();
+    long held = 0;
+    for (int i = 0; i < n; i++) {
+      int least = Math.max(0, k - (n - i));
+      int most = Math.min(i, k - 1);
+      int nextLeast = Math.max(0, k - (n - i - 1));
+      int[] low = new int[most - least + 1];
+      int[] high = new int[most - least + 1];
+      for (int c = least; c <= most; c++) {
+        low[c - least] = c < nextLeast ? Layers.TO_FAILS : c - nextLeast;
+        high[c - least] = c + 1 == k ? Layers.TO_WORKS : c + 1 - nextLeast;
+      }
+      held += low.length;
+      meter.at(held);
+      layers.add(i, low, high);
+    }
+    return layers.diagram();
+  }
+
+  /**
+   * Weighted-k-out-of-n:G: works while the weights of the working slots reach the demand.
+   *
+   * @param demand from 1 to the sum of the weights
+   * @param weights one a slot, none negative, with a sum that fits a long
+   * @param meter hears of every state
+   * @return a template with at most min(demand, 2^i) nodes on level i
+   */
+  public static Diagram capacity(long demand, long[] weights, WorkMeter meter) {
+    return StateSweep.template(new CapacityRule(demand, weights), meter);
+  }
+
+  /**
+   * Consecutive-k-out-of-n:F: fails when k neighbouring slots have failed.
+   *
+   * @param k from 1 to n
+   * @param n the number of slots
+   * @param around whether the last slot is a neighbour of the first
+   * @param meter hears of every state
+   * @return a template with at most {@code n k} nodes, or {@code n k^2} around a circle
+   */
+  public static Diagram withoutFailureRun(int k, int n, boolean around, WorkMeter meter) {
+    return StateSweep.template(new RunRule(k, n, around), meter);
+  }
+
+  /**
+   * A family of sets: of path sets, works when all slots of some set work; of cut sets, works when
+   * some slot of every set works.
+   *
+   * @param n the number of slots
+   * @param sets none empty, at least one; sorted or not, minimal or not
+   * @param paths whether the sets are path sets, or else cut sets
+   * @param meter hears of every node
+   * @return the reduced diagram, slots in increasing order. Cost: the sets are joined pairwise, so
+   *     that no set is touched more than a logarithmic number of times; sizes depend on the family.
+   */
+  public static Diagram family(int n, List<BitSet> sets, boolean paths, WorkMeter meter) {
+    NodeTable table = new NodeTable(n, meter);
+    int[] made = new int[sets.size()];
+    for (int i = 0; i < made.length; i++) {
+      int id = paths ? Diagram.WORKS : Diagram.FAILS;
+      BitSet set = sets.get(i);
+      for (int slot = set.length() - 1;
+          slot >= 0;
+          slot = slot > 0 ? set.previousSetBit(slot - 1) : -1) {
+        id = paths ? table.node(slot, Diagram.FAILS, id) : table.node(slot, id, Diagram.WORKS);
+      }
+      made[i] = id;
+    }
+    for (int count = made.length; count > 1; count = (count + 1) >> 1) {
+      for (int i = 0; i < count >> 1; i++) {
+        made[i] =
+            paths
+                ? table.or(made[2 * i], made[2 * i + 1])
+                : table.and(made[2 * i], made[2 * i + 1]);
+      }
+      if ((count & 1) == 1) {
+        made[count >> 1] = made[count - 1];
+      }
+    }
+    return table.diagram(made[0], StateSweep.identity(n));
+  }
+
+  /**
+   * A function given by all its values.
+   *
+   * @param n the number of slots, from 0 to 24
+   * @param table bit x is the value in state x; slot i is bit {@code n - 1 - i} of x, so that slot
+   *     0 is the most significant
+   * @param meter hears of every node
+   * @return the reduced diagram, slots in increasing order; linear in 2^n
+   */
+  public static Diagram truthTable(int n, BitSet table, WorkMeter meter) {
+    NodeTable nodes = new NodeTable(n, meter);
+    int[] ids = new int[1 << n];
+    for (int x = table.nextSetBit(0); x >= 0; x = table.nextSetBit(x + 1)) {
+      ids[x] = Diagram.WORKS;
+    }
+    for (int slot = n - 1; slot >= 0; slot--) {
+      for (int x = 0; x < 1 << slot; x++) {
+        ids[x] = nodes.node(slot, ids[2 * x], ids[2 * x + 1]);
+      }
+    }
+    return nodes.diagram(ids[0], StateSweep.identity(n));
+  }
+
+  /**
+   * The dual of a template: works exactly where the template fails with every slot inverted.
+   *
+   * @param template any template
+   * @return a template of the same size and order
+   */
+  public static Diagram dual(Diagram template) {
+    int size = template.size();
+    int[] low = new int[size];
+    int[] high = new int[size];
+    for (int id = 2; id < size; id++) {
+      low[id] = swapped(template.high(id));
+      high[id] = swapped(template.low(id));
+    }
+    int[] bound = new int[template.levels() + 1];
+    bound[template.levels()] = 2;
+    for (int level = 0; level < template.levels(); level++) {
+      bound[level] = template.to(level);
+    }
+    return new Diagram(swapped(template.root()), low, high, template.order(), bound);
+  }
+
+  private static int swapped(int id) {
+    return id < 2 ? 1 - id : id;
+  }
+}

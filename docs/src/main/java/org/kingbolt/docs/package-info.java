@@ -1,0 +1,5 @@
+/** Worked examples that use every module of the library. */
+@NullMarked
+package org.kingbolt.docs;
+
+import org.jspecify.annotations.NullMarked;
