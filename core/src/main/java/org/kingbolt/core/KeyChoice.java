@@ -1,0 +1,81 @@
+package org.kingbolt.core;
+
+import java.util.ArrayList;
+import java.util.Comparator;
+import java.util.List;
+import java.util.Optional;
+import java.util.Set;
+
+/**
+ * The key on which to condition a structure that does not fall apart by itself, and what is left on
+ * either side. Every candidate is tried; the one is kept whose two sides come apart best: fewest
+ * components left undecided, then the shortest and then the flattest formula.
+ */
+final class KeyChoice {
+
+  /** More candidates than this are thinned out evenly. */
+  private static final int MOST_TRIED = 48;
+
+  /** The key: a component, or a part that shares nothing with the other parts. */
+  final Structure key;
+
+  final Structure working;
+  final Structure failed;
+  private final List<Decomposition.Measure> sides;
+
+  private KeyChoice(Structure key, Structure working, Structure failed) {
+    this.key = key;
+    this.working = working;
+    this.failed = failed;
+    this.sides = List.of(Decomposition.of(working).measure(), Decomposition.of(failed).measure());
+  }
+
+  private int sum(java.util.function.ToIntFunction<Decomposition.Measure> field) {
+    return sides.stream().mapToInt(field).sum();
+  }
+
+  /** The best key of a structure that is neither a component nor independent series or parallel. */
+  static KeyChoice best(Structure structure) {
+    Set<String> repeated = Decomposition.repeated(structure);
+    List<KeyChoice> tried = new ArrayList<>();
+    if (repeated.isEmpty()) {
+      List<Structure> parts = structure.parts();
+      boolean alike = structure instanceof GateStructure;
+      int most = alike ? 1 : MOST_TRIED;
+      int stride = (parts.size() + most - 1) / most;
+      for (int i = 0; i < parts.size(); i += stride) {
+        tried.add(onPart(structure, i));
+      }
+    } else {
+      List<String> names = List.copyOf(repeated);
+      int stride = (names.size() + MOST_TRIED - 1) / MOST_TRIED;
+      for (int i = 0; i < names.size(); i += stride) {
+        String name = names.get(i);
+        tried.add(
+            new KeyChoice(
+                Structure.component(name),
+                structure.givenWorking(name),
+                structure.givenFailed(name)));
+      }
+    }
+    Comparator<KeyChoice> order =
+        Comparator.comparingInt((KeyChoice choice) -> choice.sum(Decomposition.Measure::unresolved))
+            .thenComparingInt(choice -> choice.sum(Decomposition.Measure::symbols))
+            .thenComparingInt(choice -> choice.sum(Decomposition.Measure::depth));
+    Optional<KeyChoice> best = tried.stream().min(order);
+    return best.orElseThrow(() -> new AssertionError("no key for " + structure));
+  }
+
+  private static KeyChoice onPart(Structure structure, int part) {
+    return new KeyChoice(
+        structure.parts().get(part),
+        holding(structure, part, ConstantStructure.ALWAYS),
+        holding(structure, part, ConstantStructure.NEVER));
+  }
+
+  private static Structure holding(Structure structure, int part, Structure constant) {
+    List<Structure> parts = new ArrayList<>(structure.parts());
+    parts.set(part, constant);
+    return structure.rebuild(parts);
+  }
+}
