@@ -59,9 +59,12 @@ public final class ReviewPage {
   public String toString() {
     StringBuilder page = new StringBuilder();
     page.append(title).append('\n').append("=".repeat(title.length())).append("\n\n");
-    page.append(wrapped("", "Assumed: every component, and the system, either works or has failed; "
-        + "components fail independently; no repair makes the system worse. The figures support "
-        + "the judgement of a qualified engineer and replace no code, standard or licence."));
+    page.append(
+        wrapped(
+            "",
+            "Assumed: every component, and the system, either works or has failed; "
+                + "components fail independently; no repair makes the system worse. The figures support "
+                + "the judgement of a qualified engineer and replace no code, standard or licence."));
     section(page, "1  Structure", wrapped("  ", system.structure().toString()) + irrelevant());
     section(page, "2  Reliability", reliability());
     section(page, "3  Derivation", derivation());
@@ -116,13 +119,9 @@ public final class ReviewPage {
     StringBuilder text = new StringBuilder();
     text.append(String.format(Locale.ROOT, "  %4s  %-12s  %s%n", "size", "all " + state, "set"));
     for (Set<String> set : sets.stream().limit(SETS).toList()) {
-      text.append(
-          String.format(
-              Locale.ROOT,
-              "  %4d  %-12s  %s%n",
-              set.size(),
-              String.format(Locale.ROOT, "%.4e", sets.probability(set, p)),
-              String.join(", ", set)));
+      String row =
+          String.format(Locale.ROOT, "  %4d  %-12.4e  ", set.size(), sets.probability(set, p));
+      text.append(wrapped(row, " ".repeat(row.length()), String.join(", ", set)));
     }
     text.append("  in all ").append(sets.count()).append("; by size, from 1 up: ");
     List<String> counts = new ArrayList<>();
@@ -203,16 +202,20 @@ public final class ReviewPage {
     return text.strip().lines().map(line -> "  " + line + "\n").reduce("", String::concat);
   }
 
-  /** Breaks a long line at blanks; continued lines are indented further. */
+  /** Breaks a long line at blanks and after product dots; continued lines are indented further. */
   private static String wrapped(String indent, String text) {
+    return wrapped(indent, indent + (indent.isEmpty() ? "" : "  "), text);
+  }
+
+  private static String wrapped(String first, String continued, String text) {
     StringBuilder page = new StringBuilder();
-    String line = indent;
-    for (String word : text.split(" ", -1)) {
-      if (line.length() + word.length() > WIDTH && !line.isBlank()) {
+    String line = first;
+    for (String word : text.split("(?<=[ ·])", -1)) {
+      if (line.length() + word.stripTrailing().length() > WIDTH && !line.isBlank()) {
         page.append(line.stripTrailing()).append('\n');
-        line = indent + (indent.isEmpty() ? "" : "  ");
+        line = continued;
       }
-      line += word + " ";
+      line += word;
     }
     return page.append(line.stripTrailing()).append('\n').toString();
   }

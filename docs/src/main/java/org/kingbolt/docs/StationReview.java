@@ -10,8 +10,8 @@ import org.kingbolt.core.Structure;
  * review page.
  *
  * <p>The station has one intake and one rising main, two pumps with drives, two-of-three filters, a
- * switchyard with a bus tie that is neither series nor parallel, and a control supply that pumps and a
- * filter share. Station and figures are invented.
+ * switchyard with a bus tie that is neither series nor parallel, and a control supply that pumps
+ * and a filter share. Station and figures are invented.
  */
 public final class StationReview {
 

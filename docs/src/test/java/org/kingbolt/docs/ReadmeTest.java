@@ -68,8 +68,7 @@ class ReadmeTest {
       shell.addToClasspath(path == null ? System.getProperty("java.class.path") : path);
       String rest = code;
       while (!rest.isBlank()) {
-        SourceCodeAnalysis.CompletionInfo next =
-            shell.sourceCodeAnalysis().analyzeCompletion(rest);
+        SourceCodeAnalysis.CompletionInfo next = shell.sourceCodeAnalysis().analyzeCompletion(rest);
         for (SnippetEvent event : shell.eval(next.source())) {
           assertEquals(Snippet.Status.VALID, event.status(), () -> faults(shell, event.snippet()));
           assertNull(event.exception(), () -> String.valueOf(event.exception()));

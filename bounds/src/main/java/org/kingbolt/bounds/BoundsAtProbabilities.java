@@ -1,0 +1,149 @@
+package org.kingbolt.bounds;
+
+import java.util.HashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Objects;
+import java.util.Set;
+import org.kingbolt.core.Budget;
+import org.kingbolt.core.CoherentSystem;
+import org.kingbolt.core.MinimalSets;
+import org.kingbolt.core.Probabilities;
+import org.kingbolt.core.Probability;
+import org.kingbolt.core.diagram.WorkMeter;
+
+/**
+ * Bounds on one system's reliability at given probabilities of its components.
+ *
+ * <p>Both ends are computed on both sides by sums and products of non-negative terms and rounded
+ * outwards, so that an end at 1e-18 keeps its digits and rounding never takes the exact figure out
+ * of the interval.
+ *
+ * <p>Immutable; safe to share between threads.
+ */
+public final class BoundsAtProbabilities {
+
+  private final CoherentSystem system;
+  private final Probabilities p;
+  private final Map<String, Probability> byName = new HashMap<>();
+
+  BoundsAtProbabilities(CoherentSystem system, Probabilities p) {
+    this.system = system;
+    this.p = p;
+    List<Probability> values = p.forComponents(system.components());
+    for (int i = 0; i < values.size(); i++) {
+      byName.put(system.components().get(i), values.get(i));
+    }
+  }
+
+  /**
+   * Esary–Proschan bounds within {@link Budget#ofHeap()}.
+   *
+   * @return the interval; see {@link #esaryProschan(Budget)}
+   * @throws org.kingbolt.core.BudgetExceededException if there are too many minimal sets
+   */
+  public Interval esaryProschan() {
+    return esaryProschan(Budget.ofHeap());
+  }
+
+  /**
+   * Esary–Proschan bounds: at least the product over the minimal cut sets of {@code 1 - product of
+   * q}, at most one minus the product over the minimal path sets of {@code 1 - product of p}.
+   *
+   * <p>Holds for independent components. (For components that are merely associated the
+   * inequalities hold with the true probabilities of whole sets, which products of single
+   * probabilities do not give.) Tight where the system is highly reliable or hardly reliable at
+   * all; attained by series and parallel systems.
+   *
+   * <p>Source: Esary &amp; Proschan, Coherent structures of non-identical components, Technometrics
+   * 5 (1963) 191.
+   *
+   * @param budget how much work it may cost; every minimal set counts as a node
+   * @return the interval. Cost: linear in the total size of all minimal path and cut sets.
+   * @throws org.kingbolt.core.BudgetExceededException if the budget is used up
+   */
+  public Interval esaryProschan(Budget budget) {
+    Objects.requireNonNull(budget, "budget is null");
+    SetProduct cuts = combined(system.minimalCutSets(budget), false, budget);
+    SetProduct paths = combined(system.minimalPathSets(budget), true, budget);
+    return new Interval(
+        Rounding.down(cuts.none(), cuts.any(), cuts.operations() + slack()),
+        Rounding.up(paths.any(), paths.none(), paths.operations() + slack()),
+        Assumption.INDEPENDENT,
+        "Esary-Proschan",
+        "with independent components the minimal cuts are at least as likely to hold all together,"
+            + " and the minimal paths to fail all together, as if they shared no components");
+  }
+
+  /**
+   * Min–max bounds within {@link Budget#ofHeap()}.
+   *
+   * @return the interval; see {@link #minMax(Budget)}
+   * @throws org.kingbolt.core.BudgetExceededException if the minimal sets are too many to hold
+   */
+  public Interval minMax() {
+    return minMax(Budget.ofHeap());
+  }
+
+  /**
+   * Min–max bounds from single paths and cuts: at least the largest product of p over a minimal
+   * path set, at most the smallest {@code 1 - product of q} over a minimal cut set.
+   *
+   * <p>Holds for associated components, independent ones among them: the system works whenever one
+   * path does, and fails whenever one cut does, and the members of a set are at least as likely to
+   * work (or to have failed) all together as independent ones would be.
+   *
+   * <p>Source: Barlow &amp; Proschan, Statistical Theory of Reliability and Life Testing, 1975, ch.
+   * 2.
+   *
+   * @param budget how much work it may cost
+   * @return the interval. Cost: the diagrams of minimal sets, of which only the best set is listed.
+   * @throws org.kingbolt.core.BudgetExceededException if the budget is used up
+   */
+  public Interval minMax(Budget budget) {
+    Objects.requireNonNull(budget, "budget is null");
+    SetProduct path = best(system.minimalPathSets(budget), true);
+    SetProduct cut = best(system.minimalCutSets(budget), false);
+    return new Interval(
+        Rounding.down(path.any(), path.none(), path.operations() + slack()),
+        Rounding.up(cut.none(), cut.any(), cut.operations() + slack()),
+        Assumption.ASSOCIATED,
+        "min-max",
+        "with associated components the system works at least as often as its best path, and fails"
+            + " at least as often as its worst cut, would with independent members");
+  }
+
+  /** Operations in an exact evaluation, for whose rounding an interval must leave room, too. */
+  private long slack() {
+    return 4L * system.components().size();
+  }
+
+  private SetProduct combined(MinimalSets sets, boolean paths, Budget budget) {
+    WorkMeter meter = budget.start("combining minimal sets");
+    SetProduct product = new SetProduct();
+    long count = 0;
+    for (Set<String> set : sets) {
+      meter.at(++count);
+      add(product, set, paths);
+    }
+    return product;
+  }
+
+  private SetProduct best(MinimalSets sets, boolean paths) {
+    SetProduct product = new SetProduct();
+    for (Set<String> set : sets.mostProbable(1, p)) {
+      add(product, set, paths);
+    }
+    return product;
+  }
+
+  private void add(SetProduct product, Set<String> set, boolean paths) {
+    product.begin();
+    for (String name : set) {
+      Probability value = Objects.requireNonNull(byName.get(name));
+      product.member(
+          paths ? value.working() : value.failing(), paths ? value.failing() : value.working());
+    }
+    product.end();
+  }
+}
