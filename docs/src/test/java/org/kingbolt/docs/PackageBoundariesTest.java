@@ -22,6 +22,7 @@ class PackageBoundariesTest {
   private static final JavaClasses LIBRARY =
       new ClassFileImporter()
           .withImportOption(ImportOption.Predefined.DO_NOT_INCLUDE_TESTS)
+          .withImportOption(location -> !location.contains("-tests.jar"))
           .importPackages("org.kingbolt.core", "org.kingbolt.bounds", "org.kingbolt.importance");
 
   @Test

@@ -25,7 +25,7 @@ class StationReviewTest {
     BigDecimal exact = failingByEnumeration();
     Probability diagram = STATION.compile().reliability(FAILING);
     assertEquals(exact.doubleValue(), diagram.failing(), 1e-13 * diagram.failing());
-    String printed = exact.setScale(12, java.math.RoundingMode.HALF_EVEN).toPlainString();
+    String printed = String.format(java.util.Locale.ROOT, "%.6e", exact);
     assertTrue(StationReview.page().contains(printed), () -> printed + "\n" + StationReview.page());
   }
 
