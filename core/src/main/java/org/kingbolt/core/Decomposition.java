@@ -104,7 +104,13 @@ final class Decomposition {
     } else if (structure instanceof ConstantStructure) {
       formula = Formula.of(structure.isAlwaysWorking() ? Formula.Kind.ONE : Formula.Kind.ZERO);
     } else if (structure instanceof GateStructure gate && (gate.isSeries() || gate.isParallel())) {
-      formula = gate(gate, item.depth, uses);
+      List<Structure> flat = flattened(gate, gate.isSeries());
+      if (flat.size() == 1) {
+        Structure only = flat.get(0);
+        pending.push(new Pending(only, item.parent, item.place, item.depth, new Uses(only)));
+        return;
+      }
+      formula = gate(flat, gate.isSeries(), item.depth, uses);
     } else {
       unresolved += structure.components().size();
       formula = Formula.result(structure);
@@ -112,9 +118,7 @@ final class Decomposition {
     item.parent.operands.set(item.place, formula);
   }
 
-  private Formula gate(GateStructure gate, int gateDepth, Uses uses) {
-    boolean series = gate.isSeries();
-    List<Structure> flat = flattened(gate, series);
+  private Formula gate(List<Structure> flat, boolean series, int gateDepth, Uses uses) {
     List<Structure> groups = independent(flat, series, uses);
     if (groups.size() == 1) {
       Structure whole = groups.get(0);
