@@ -17,7 +17,8 @@ final class Rounding {
 
   /** An upper end: more working, less failing. */
   static Probability up(double working, double failing, long operations) {
-    return down(failing, working, operations).complement();
+    double slack = slack(operations);
+    return Probability.of(Math.min(1, working * (1 + slack)), failing * (1 - slack));
   }
 
   private static double slack(long operations) {

@@ -80,9 +80,9 @@ public final class Evaluation {
    *
    * <p>At each node the difference of its two children is taken on the side where it keeps more
    * digits. Where digits would be lost even so, pairs of nodes are followed down to where none are,
-   * as long as these pairs are not more than a few times the nodes; beyond that a derivative can
-   * only be trusted to about {@code 4 levels 2^-53} of the smaller of the two sides. Cost: one more
-   * scan, downwards, and the pairs.
+   * as long as these pairs are not more than a few times the nodes and a few millions; beyond that
+   * a derivative can only be trusted to about {@code 4 levels 2^-53} of the smaller of the two
+   * sides. Cost: one more scan, downwards, and the pairs.
    *
    * @return indexed by variable, each from 0 to 1; 0 for variables that do not matter
    */

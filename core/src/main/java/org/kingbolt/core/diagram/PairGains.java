@@ -15,6 +15,7 @@ final class PairGains {
   private static final double SHARE = 0.125;
 
   private static final long FEWEST = 1 << 14;
+  private static final long MOST = 1 << 22;
 
   private final Diagram diagram;
   private final double[] working;
@@ -44,7 +45,7 @@ final class PairGains {
     this.failing = failing;
     this.works = works;
     this.fails = fails;
-    this.most = Math.max(FEWEST, 4L * diagram.size());
+    this.most = Math.min(MOST, Math.max(FEWEST, 4L * diagram.size()));
   }
 
   static boolean keepsDigits(double difference, double term) {

@@ -95,13 +95,13 @@ public final class SetDiagram {
 
   /**
    * Walks over the family in order of decreasing weight, the product of the weights of a set's
-   * variables; sets of equal weight in order of levels.
+   * variables; the order among equal weights is fixed but of no meaning.
    *
    * @param logWeights indexed by variable: the natural logarithm of each weight, at most 0,
    *     possibly negative infinity
-   * @param meter hears of every partial set held
+   * @param meter hears of every route held
    * @return a fresh walk; nothing is listed in advance. Cost: one scan to begin with, then at most
-   *     one heap operation a level for each set.
+   *     one heap operation a level for each set, and as many routes held.
    */
   public SetWalk walkByWeight(double[] logWeights, WorkMeter meter) {
     return new WeightWalk(nodes, logWeights, meter);

@@ -4,18 +4,22 @@ import java.util.PriorityQueue;
 import org.jspecify.annotations.Nullable;
 
 /**
- * Sets in order of decreasing weight: a best-first search in which the bound on what is still to
- * come is exact, so that every step of it belongs to a set that will be delivered.
+ * Sets in order of decreasing weight. Every waiting route stands for its best completion, which is
+ * known from the scan at the beginning; delivering it leaves one new route for each node at which
+ * another set can branch off.
+ *
+ * <p>Method: Lawler, A procedure for computing the K best solutions to discrete optimization
+ * problems, Management Sci. 18 (1972) 401.
  */
 final class WeightWalk implements SetWalk {
 
-  /** A partial set: where it has come to, and the variables taken, newest first. */
-  private record Partial(
+  /** The beginning of a set: where it has come to, and the variables taken, newest first. */
+  private record Route(
       double bound, double taken, int id, int count, @Nullable Taken last, long number)
-      implements Comparable<Partial> {
+      implements Comparable<Route> {
 
     @Override
-    public int compareTo(Partial other) {
+    public int compareTo(Route other) {
       int byBound = Double.compare(other.bound, bound);
       return byBound != 0 ? byBound : Long.compare(number, other.number);
     }
@@ -27,7 +31,7 @@ final class WeightWalk implements SetWalk {
   private final double[] logWeight;
   private final double[] best;
   private final WorkMeter meter;
-  private final PriorityQueue<Partial> queue = new PriorityQueue<>();
+  private final PriorityQueue<Route> queue = new PriorityQueue<>();
   private long made;
 
   WeightWalk(Diagram nodes, double[] logWeights, WorkMeter meter) {
@@ -50,32 +54,44 @@ final class WeightWalk implements SetWalk {
   private void offer(double taken, int id, int count, @Nullable Taken last) {
     if (id != SetDiagram.NO_SETS) {
       meter.at(queue.size());
-      queue.add(new Partial(taken + best[id], taken, id, count, last, made++));
+      queue.add(new Route(taken + best[id], taken, id, count, last, made++));
     }
   }
 
   @Override
   public int @Nullable [] next() {
-    for (Partial partial = queue.poll(); partial != null; partial = queue.poll()) {
-      int id = partial.id;
-      if (id == SetDiagram.ONLY_EMPTY_SET) {
-        return set(partial);
-      }
-      int variable = nodes.variableAt(nodes.levelOf(id));
-      offer(
-          partial.taken + logWeight[variable],
-          nodes.high(id),
-          partial.count + 1,
-          new Taken(variable, partial.last));
-      offer(partial.taken, nodes.low(id), partial.count, partial.last);
+    Route route = queue.poll();
+    if (route == null) {
+      return null;
     }
-    return null;
+    double taken = route.taken;
+    int id = route.id;
+    int count = route.count;
+    Taken last = route.last;
+    while (id != SetDiagram.ONLY_EMPTY_SET) {
+      int low = nodes.low(id);
+      int high = nodes.high(id);
+      int variable = nodes.variableAt(nodes.levelOf(id));
+      double weight = logWeight[variable];
+      Taken with = new Taken(variable, last);
+      if (low == SetDiagram.NO_SETS || weight + best[high] >= best[low]) {
+        offer(taken, low, count, last);
+        taken += weight;
+        last = with;
+        count++;
+        id = high;
+      } else {
+        offer(taken + weight, high, count + 1, with);
+        id = low;
+      }
+    }
+    return set(last, count);
   }
 
-  private static int[] set(Partial partial) {
-    int[] set = new int[partial.count];
-    Taken taken = partial.last;
-    for (int i = partial.count - 1; taken != null; i--) {
+  private static int[] set(@Nullable Taken last, int count) {
+    int[] set = new int[count];
+    Taken taken = last;
+    for (int i = count - 1; taken != null; i--) {
       set[i] = taken.variable;
       taken = taken.before;
     }

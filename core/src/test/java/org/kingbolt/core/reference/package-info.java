@@ -1,0 +1,2 @@
+/** Comparison with general-purpose libraries for graphs and for propositional logic. */
+package org.kingbolt.core.reference;
