@@ -17,7 +17,7 @@ final class Rounding {
 
   /** An upper end: more working, less failing. */
   static Probability up(double working, double failing, long operations) {
-    return down(failing, working, operations).complement();
+    return down(/* working= */ failing, /* failing= */ working, operations).complement();
   }
 
   private static double slack(long operations) {
