@@ -1,6 +1,7 @@
 package org.kingbolt.docs;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.Comparator;
 import java.util.List;
 import java.util.Locale;
@@ -28,18 +29,53 @@ public final class ReviewPage {
   private static final int WIDTH = 96;
   private static final int SETS = 10;
 
+  /** What a page can hold. */
+  public enum Section {
+    /** The description, and the components that never matter. */
+    STRUCTURE("Structure"),
+    /** The figure in both tails. */
+    RELIABILITY("Reliability"),
+    /** The formula, step by step; long for networks that do not fall apart. */
+    DERIVATION("Derivation"),
+    /** The smallest ways to fail, and how many there are of each size. */
+    SMALLEST_CUT_SETS("Smallest minimal cut sets"),
+    /** The likeliest ways to fail, and the share of the failing probability that each makes up. */
+    LIKELIEST_CUT_SETS("Most probable minimal cut sets"),
+    /** The smallest ways to work, and how many there are of each size. */
+    SMALLEST_PATH_SETS("Smallest minimal path sets"),
+    /** Intervals that hold. */
+    INTERVAL("Guaranteed interval"),
+    /** The ranking of the components. */
+    BIRNBAUM("Birnbaum importance"),
+    /** Single points of failure and the largest gains. */
+    ADVICE("What to look at first");
+
+    private final String heading;
+
+    Section(String heading) {
+      this.heading = heading;
+    }
+  }
+
+  private static final List<Section> USUAL =
+      Arrays.stream(Section.values())
+          .filter(section -> section != Section.LIKELIEST_CUT_SETS)
+          .toList();
+
   private final String title;
   private final CoherentSystem system;
   private final Probabilities p;
+  private final List<Section> sections;
 
-  private ReviewPage(String title, CoherentSystem system, Probabilities p) {
+  private ReviewPage(String title, CoherentSystem system, Probabilities p, List<Section> sections) {
     this.title = title;
     this.system = system;
     this.p = p;
+    this.sections = sections;
   }
 
   /**
-   * Prepares the page.
+   * Prepares the usual page: all sections but the most probable cut sets.
    *
    * @param title its first line
    * @param structure the system
@@ -47,7 +83,17 @@ public final class ReviewPage {
    * @return the page; {@link #toString()} is its text
    */
   public static ReviewPage of(String title, Structure structure, Probabilities p) {
-    return new ReviewPage(title, structure.compile(), p);
+    return new ReviewPage(title, structure.compile(), p, USUAL);
+  }
+
+  /**
+   * Chooses what to show.
+   *
+   * @param chosen the sections, in their order on the page
+   * @return a page of these sections, numbered from 1
+   */
+  public ReviewPage showing(Section... chosen) {
+    return new ReviewPage(title, system, p, List.of(chosen));
   }
 
   /**
@@ -65,20 +111,26 @@ public final class ReviewPage {
             "Assumed: every component, and the system, either works or has failed; "
                 + "components fail independently; no repair makes the system worse. The figures support "
                 + "the judgement of a qualified engineer and replace no code, standard or licence."));
-    section(page, "1  Structure", wrapped("  ", system.structure().toString()) + irrelevant());
-    section(page, "2  Reliability", reliability());
-    section(page, "3  Derivation", derivation());
-    section(page, "4  Smallest minimal cut sets", sets(system.minimalCutSets(), "failed"));
-    section(page, "5  Smallest minimal path sets", sets(system.minimalPathSets(), "working"));
-    section(page, "6  Guaranteed interval", bounds());
-    section(page, "7  Birnbaum importance", indented(birnbaum().toString()));
-    section(page, "8  What to look at first", advice());
+    for (int i = 0; i < sections.size(); i++) {
+      String heading = (i + 1) + "  " + sections.get(i).heading;
+      page.append('\n').append(heading).append('\n').append("-".repeat(heading.length()));
+      page.append('\n').append(body(sections.get(i)));
+    }
     return page.toString();
   }
 
-  private static void section(StringBuilder page, String heading, String body) {
-    page.append('\n').append(heading).append('\n').append("-".repeat(heading.length()));
-    page.append('\n').append(body);
+  private String body(Section section) {
+    return switch (section) {
+      case STRUCTURE -> wrapped("  ", system.structure().toString()) + irrelevant();
+      case RELIABILITY -> reliability();
+      case DERIVATION -> derivation();
+      case SMALLEST_CUT_SETS -> sets(system.minimalCutSets(), "failed");
+      case LIKELIEST_CUT_SETS -> likeliest();
+      case SMALLEST_PATH_SETS -> sets(system.minimalPathSets(), "working");
+      case INTERVAL -> bounds();
+      case BIRNBAUM -> indented(birnbaum().toString());
+      case ADVICE -> advice();
+    };
   }
 
   private String irrelevant() {
@@ -90,11 +142,16 @@ public final class ReviewPage {
 
   private String reliability() {
     Probability diagram = system.reliability(p);
-    Probability formula = Derivation.of(system.structure()).reliability(p);
-    return row("components", Integer.toString(system.components().size()))
-        + row("works", number(diagram.working()))
-        + row("fails", number(diagram.failing()))
-        + row("fails, by the formula of section 3", number(formula.failing()));
+    String text =
+        row("components", Integer.toString(system.components().size()))
+            + row("works", number(diagram.working()))
+            + row("fails", number(diagram.failing()));
+    int derived = sections.indexOf(Section.DERIVATION) + 1;
+    if (derived > 0) {
+      Probability formula = Derivation.of(system.structure()).reliability(p);
+      text += row("fails, by the formula of section " + derived, number(formula.failing()));
+    }
+    return text;
   }
 
   private String derivation() {
@@ -127,6 +184,19 @@ public final class ReviewPage {
     List<String> counts = new ArrayList<>();
     sets.countBySize().stream().skip(1).forEach(count -> counts.add(count.toString()));
     return text.append(String.join(", ", counts)).append('\n').toString();
+  }
+
+  private String likeliest() {
+    MinimalSets cuts = system.minimalCutSets();
+    double fails = system.reliability(p).failing();
+    StringBuilder text = new StringBuilder();
+    text.append(String.format(Locale.ROOT, "  %-12s  %8s  %s%n", "all failed", "share", "set"));
+    for (Set<String> set : cuts.mostProbable(SETS, p)) {
+      double all = cuts.probability(set, p);
+      String row = String.format(Locale.ROOT, "  %-12.4e  %6.2f %%  ", all, 100 * all / fails);
+      text.append(wrapped(row, " ".repeat(row.length()), String.join(", ", set)));
+    }
+    return text.toString();
   }
 
   private String bounds() {

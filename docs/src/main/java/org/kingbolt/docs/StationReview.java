@@ -54,7 +54,7 @@ public final class StationReview {
     Map<String, Double> failing = new LinkedHashMap<>();
     for (String line : Resources.text("station-failing.txt").lines().toList()) {
       if (!line.isBlank() && !line.startsWith("#")) {
-        String[] words = line.strip().split("\\s+");
+        String[] words = line.strip().split("\\s+", -1);
         failing.put(words[0], Double.valueOf(words[1]));
       }
     }
