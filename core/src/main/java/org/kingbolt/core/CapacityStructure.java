@@ -4,7 +4,7 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
-import org.kingbolt.core.diagram.Diagram;
+import org.kingbolt.core.diagram.Composer;
 import org.kingbolt.core.diagram.Templates;
 import org.kingbolt.core.diagram.WorkMeter;
 
@@ -126,9 +126,9 @@ final class CapacityStructure extends Structure {
   }
 
   @Override
-  Diagram template(WorkMeter meter) {
-    return Templates.capacity(
-        demand, capacities.stream().mapToLong(Long::longValue).toArray(), meter);
+  int express(Composer composer, int[] partExpressions, WorkMeter meter) {
+    long[] weights = capacities.stream().mapToLong(Long::longValue).toArray();
+    return composer.operator(Templates.capacity(demand, weights), partExpressions);
   }
 
   @Override

@@ -5,8 +5,10 @@ import java.util.HashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
+import java.util.function.Supplier;
 import org.kingbolt.core.diagram.Composer;
 import org.kingbolt.core.diagram.Diagram;
+import org.kingbolt.core.diagram.FrontierTooWideException;
 import org.kingbolt.core.diagram.WorkMeter;
 
 /** From a structure to the engine's expression, and on to a diagram. */
@@ -16,7 +18,31 @@ final class Compilation {
 
   static CoherentSystem compile(Structure structure, Budget budget) {
     WorkMeter meter = meter(budget);
-    return new CoherentSystem(structure, composer(structure, meter).compose(meter));
+    return new CoherentSystem(structure, within(() -> expression(structure, meter).compose(meter)));
+  }
+
+  /** The probability alone, without a diagram of the whole. */
+  static Probability reliability(Structure structure, Probabilities p, Budget budget) {
+    List<Probability> values =
+        Check.notNull(p, "probabilities").forComponents(structure.components());
+    double[] working = values.stream().mapToDouble(Probability::working).toArray();
+    double[] failing = values.stream().mapToDouble(Probability::failing).toArray();
+    WorkMeter meter =
+        Check.notNull(budget, "budget").start("working out the reliability without a diagram");
+    double[] both = within(() -> expression(structure, meter).expect(working, failing, meter));
+    return Probability.computed(both[0], both[1]);
+  }
+
+  static int widestFrontier(Structure structure) {
+    return expression(structure, WorkMeter.UNLIMITED).composer.widestFrontier();
+  }
+
+  private static <T> T within(Supplier<T> work) {
+    try {
+      return work.get();
+    } catch (FrontierTooWideException wide) {
+      throw BudgetExceededException.width(wide);
+    }
   }
 
   static CoherentSystem compile(Structure structure, List<String> order, Budget budget) {
@@ -45,7 +71,8 @@ final class Compilation {
               + "; name every component once");
     }
     WorkMeter meter = meter(budget);
-    return new CoherentSystem(structure, composer(structure, meter).compose(variables, meter));
+    return new CoherentSystem(
+        structure, within(() -> expression(structure, meter).compose(variables, meter)));
   }
 
   private static WorkMeter meter(Budget budget) {
@@ -60,17 +87,34 @@ final class Compilation {
     return numbers;
   }
 
+  /** A structure as an expression of a composer. */
+  private record Expression(Composer composer, int root) {
+
+    Diagram compose(WorkMeter meter) {
+      return composer.compose(root, meter);
+    }
+
+    Diagram compose(int[] order, WorkMeter meter) {
+      return composer.compose(root, order, meter);
+    }
+
+    double[] expect(double[] working, double[] failing, WorkMeter meter) {
+      return composer.expect(root, working, failing, meter);
+    }
+  }
+
   /** Equal sub-structures become one expression. */
-  private static Composer composer(Structure structure, WorkMeter meter) {
+  private static Expression expression(Structure structure, WorkMeter meter) {
     Map<String, Integer> numbers = numbers(structure.components());
     Composer composer = new Composer(numbers.size());
     Map<Structure, Integer> made = new HashMap<>();
+    int root = -1;
     for (Structure part : Fold.postOrder(structure)) {
-      if (!made.containsKey(part)) {
-        made.put(part, add(composer, part, numbers, made, meter));
-      }
+      Integer known = made.get(part);
+      root = known != null ? known : add(composer, part, numbers, made, meter);
+      made.put(part, root);
     }
-    return composer;
+    return new Expression(composer, root);
   }
 
   private static int add(
@@ -82,11 +126,10 @@ final class Compilation {
     if (part instanceof ComponentStructure component) {
       return composer.variable(numbers.getOrDefault(component.name(), -1));
     }
-    Diagram template = part.template(meter);
     int[] slots = new int[part.parts().size()];
     for (int i = 0; i < slots.length; i++) {
       slots[i] = made.getOrDefault(part.parts().get(i), -1);
     }
-    return composer.operator(template, slots);
+    return part.express(composer, slots, meter);
   }
 }

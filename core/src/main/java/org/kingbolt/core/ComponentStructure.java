@@ -1,8 +1,7 @@
 package org.kingbolt.core;
 
 import java.util.List;
-import org.kingbolt.core.diagram.Diagram;
-import org.kingbolt.core.diagram.Templates;
+import org.kingbolt.core.diagram.Composer;
 import org.kingbolt.core.diagram.WorkMeter;
 
 /** One component. */
@@ -37,8 +36,8 @@ final class ComponentStructure extends Structure {
   }
 
   @Override
-  Diagram template(WorkMeter meter) {
-    return Templates.atLeast(1, 1, meter);
+  int express(Composer composer, int[] partExpressions, WorkMeter meter) {
+    throw new AssertionError("a component is a leaf");
   }
 
   @Override

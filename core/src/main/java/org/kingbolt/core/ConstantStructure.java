@@ -1,7 +1,7 @@
 package org.kingbolt.core;
 
 import java.util.List;
-import org.kingbolt.core.diagram.Diagram;
+import org.kingbolt.core.diagram.Composer;
 import org.kingbolt.core.diagram.Templates;
 import org.kingbolt.core.diagram.WorkMeter;
 
@@ -40,8 +40,8 @@ final class ConstantStructure extends Structure {
   }
 
   @Override
-  Diagram template(WorkMeter meter) {
-    return Templates.constant(works);
+  int express(Composer composer, int[] partExpressions, WorkMeter meter) {
+    return composer.operator(Templates.constant(works), partExpressions);
   }
 
   @Override

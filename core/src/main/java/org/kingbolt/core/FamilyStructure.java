@@ -8,7 +8,7 @@ import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
-import org.kingbolt.core.diagram.Diagram;
+import org.kingbolt.core.diagram.Composer;
 import org.kingbolt.core.diagram.Templates;
 import org.kingbolt.core.diagram.WorkMeter;
 
@@ -176,8 +176,8 @@ final class FamilyStructure extends Structure {
   }
 
   @Override
-  Diagram template(WorkMeter meter) {
-    return Templates.family(parts().size(), sets, paths, meter);
+  int express(Composer composer, int[] partExpressions, WorkMeter meter) {
+    return composer.operator(Templates.family(parts().size(), sets, paths, meter), partExpressions);
   }
 
   @Override

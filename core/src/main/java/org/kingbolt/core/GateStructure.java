@@ -5,7 +5,7 @@ import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
-import org.kingbolt.core.diagram.Diagram;
+import org.kingbolt.core.diagram.Composer;
 import org.kingbolt.core.diagram.Templates;
 import org.kingbolt.core.diagram.WorkMeter;
 
@@ -162,8 +162,8 @@ final class GateStructure extends Structure {
   }
 
   @Override
-  Diagram template(WorkMeter meter) {
-    return Templates.atLeast(k, parts().size(), meter);
+  int express(Composer composer, int[] partExpressions, WorkMeter meter) {
+    return composer.operator(Templates.atLeast(k, parts().size()), partExpressions);
   }
 
   @Override

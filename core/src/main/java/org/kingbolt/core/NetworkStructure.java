@@ -7,11 +7,8 @@ import java.util.List;
 import java.util.Map;
 import java.util.Objects;
 import java.util.Set;
-import org.kingbolt.core.diagram.Diagram;
-import org.kingbolt.core.diagram.FrontierSweep;
-import org.kingbolt.core.diagram.FrontierTooWideException;
+import org.kingbolt.core.diagram.Composer;
 import org.kingbolt.core.diagram.NetworkProblem;
-import org.kingbolt.core.diagram.Templates;
 import org.kingbolt.core.diagram.WorkMeter;
 
 /**
@@ -176,13 +173,8 @@ final class NetworkStructure extends Structure {
   }
 
   @Override
-  Diagram template(WorkMeter meter) {
-    try {
-      Diagram template = FrontierSweep.template(problem, meter);
-      return dual ? Templates.dual(template) : template;
-    } catch (FrontierTooWideException wide) {
-      throw BudgetExceededException.width(wide);
-    }
+  int express(Composer composer, int[] partExpressions, WorkMeter meter) {
+    return composer.network(problem, dual, partExpressions);
   }
 
   @Override

@@ -6,7 +6,8 @@ import java.util.HashSet;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Set;
-import org.kingbolt.core.diagram.Diagram;
+import org.kingbolt.core.diagram.Composer;
+import org.kingbolt.core.diagram.Operator;
 import org.kingbolt.core.diagram.Templates;
 import org.kingbolt.core.diagram.WorkMeter;
 
@@ -126,9 +127,9 @@ final class RunStructure extends Structure {
   }
 
   @Override
-  Diagram template(WorkMeter meter) {
-    Diagram template = Templates.withoutFailureRun(k, parts().size(), around, meter);
-    return dual ? Templates.dual(template) : template;
+  int express(Composer composer, int[] partExpressions, WorkMeter meter) {
+    Operator operator = Templates.withoutFailureRun(k, parts().size(), around);
+    return composer.operator(dual ? Templates.dual(operator) : operator, partExpressions);
   }
 
   @Override

@@ -11,7 +11,7 @@ import java.util.Map;
 import java.util.Set;
 import java.util.function.Predicate;
 import org.jspecify.annotations.Nullable;
-import org.kingbolt.core.diagram.Diagram;
+import org.kingbolt.core.diagram.Composer;
 import org.kingbolt.core.diagram.WorkMeter;
 
 /**
@@ -498,6 +498,61 @@ public abstract sealed class Structure implements Serializable
     return Compilation.compile(this, order, budget);
   }
 
+  /**
+   * The probability that the system works, without compiling: the way when only the figure is
+   * asked, once. Within {@link Budget#ofHeap()}.
+   *
+   * @param p the components' probabilities; components must fail independently
+   * @return both sides, as {@link CoherentSystem#reliability(Probabilities)} gives them, up to the
+   *     last digits
+   * @throws IllegalArgumentException if components have no probability; the message lists them
+   * @throws BudgetExceededException if the work grows too large
+   */
+  public Probability reliability(Probabilities p) {
+    return reliability(p, Budget.ofHeap());
+  }
+
+  /**
+   * The probability that the system works when all components are alike, without compiling.
+   *
+   * @param working every component's probability of working, from 0 to 1
+   * @return both sides
+   * @throws IllegalArgumentException if the number is NaN or outside [0, 1]
+   * @throws BudgetExceededException if the work grows too large
+   */
+  public Probability reliability(double working) {
+    return reliability(Probabilities.all(working));
+  }
+
+  /**
+   * The probability that the system works, without compiling. Parts that share no components are
+   * worked out one by one; a network holds two layers of frontier states and no diagram; where
+   * parts share components, a diagram is made of the smallest part that holds all uses.
+   *
+   * @param p the components' probabilities; components must fail independently
+   * @param budget how much work it may cost; a state of a network counts by its size
+   * @return both sides, each by sums of non-negative terms. Cost: for networks, time as for
+   *     compiling and memory for the widest layer only.
+   * @throws IllegalArgumentException if components have no probability; the message lists them
+   * @throws BudgetExceededException if the budget is used up
+   */
+  public Probability reliability(Probabilities p, Budget budget) {
+    return Compilation.reliability(this, p, budget);
+  }
+
+  /**
+   * How wide the networks in this structure are to the frontier method, after series, parallel and
+   * other reductions: known at once, and the measure of what compiling will cost. Every further
+   * node multiplies the number of states by two to three; up to a dozen is a matter of a second or
+   * so, twenty is likely to exceed any budget.
+   *
+   * @return the most nodes between what has been swept and what has not, in the best order found; 0
+   *     where there are no networks, or reductions leave none
+   */
+  public int frontierWidth() {
+    return Compilation.widestFrontier(this);
+  }
+
   // ---- what each kind of structure provides -----------------------------------------------------
 
   /** What stands in each slot of this operator; for a component or a constant, nothing. */
@@ -514,8 +569,8 @@ public abstract sealed class Structure implements Serializable
   /** The dual operator, over parts that are already the duals of this one's. */
   abstract Structure dualOver(List<Structure> dualParts);
 
-  /** The operator as a decision diagram over its slots. */
-  abstract Diagram template(WorkMeter meter);
+  /** Adds this operator over the expressions of its parts; returns the expression's number. */
+  abstract int express(Composer composer, int[] partExpressions, WorkMeter meter);
 
   /** Writes the text. */
   abstract void write(TextWriter out);

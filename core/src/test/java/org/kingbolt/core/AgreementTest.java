@@ -66,6 +66,7 @@ class AgreementTest {
       assertEquals(sample.oracle().works(set), system.diagram().works(working), set::toString);
     }
     assertReliability(sample.oracle(), p, system.reliability(p), "diagram");
+    assertReliability(sample.oracle(), p, sample.structure().reliability(p), "no diagram");
     assertEquals(sample.oracle().irrelevant(), system.irrelevantComponents());
   }
 

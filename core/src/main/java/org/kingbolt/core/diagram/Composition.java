@@ -37,6 +37,7 @@ final class Composition {
   private final Composer composer;
   private final ExpressionOrder order;
   private final NodeTable table;
+  private final WorkMeter meter;
 
   /** Diagram of each expression built on its own, or 0. */
   private final int[] alone;
@@ -47,24 +48,32 @@ final class Composition {
   Composition(Composer composer, ExpressionOrder order, WorkMeter meter) {
     this.composer = composer;
     this.order = order;
+    this.meter = meter;
     this.table = new NodeTable(composer.variables(), held -> meter.at(held + framesHold));
     this.alone = new int[composer.count()];
   }
 
-  Diagram diagram() {
-    int root = composer.count() - 1;
-    int result;
-    if (composer.isLeaf(root)) {
-      result = leaf(root, Diagram.FAILS, Diagram.WORKS);
-    } else {
-      open(root, Diagram.FAILS, Diagram.WORKS);
-      result = run();
+  Diagram diagram(int root) {
+    return table.diagram(build(root), order.variableAtLevel());
+  }
+
+  /** Builds one expression on its own, beside what has been built before. */
+  int build(int expression) {
+    if (composer.isLeaf(expression)) {
+      return leaf(expression, Diagram.FAILS, Diagram.WORKS);
     }
-    return table.diagram(result, order.variableAtLevel());
+    open(expression, Diagram.FAILS, Diagram.WORKS);
+    return run();
+  }
+
+  /** The table in which expressions are built. */
+  NodeTable table() {
+    return table;
   }
 
   private void open(int expression, int fails, int works) {
-    Frame frame = new Frame(expression, composer.template(expression), fails, works);
+    Frame frame =
+        new Frame(expression, composer.operatorOf(expression).template(meter), fails, works);
     framesHold += frame.made.length / 8;
     frames.push(frame);
   }

@@ -27,9 +27,9 @@ final class ExpressionOrder {
     this.knot = new boolean[composer.count()];
   }
 
-  static ExpressionOrder depthFirst(Composer composer) {
+  static ExpressionOrder depthFirst(Composer composer, int root) {
     ExpressionOrder order = new ExpressionOrder(composer);
-    order.visit();
+    order.visit(root);
     for (int variable = 0; variable < composer.variables(); variable++) {
       order.place(variable);
     }
@@ -37,12 +37,12 @@ final class ExpressionOrder {
     return order;
   }
 
-  static ExpressionOrder given(Composer composer, int[] variables) {
+  static ExpressionOrder given(Composer composer, int root, int[] variables) {
     ExpressionOrder order = new ExpressionOrder(composer);
     for (int variable : variables) {
       order.place(variable);
     }
-    order.visit();
+    order.visit(root);
     order.measure();
     return order;
   }
@@ -55,7 +55,7 @@ final class ExpressionOrder {
   }
 
   /** Depth-first: places variables at their first use and finds the knots. */
-  private void visit() {
+  private void visit(int root) {
     int expressions = composer.count();
     int[] lastUse = new int[expressions];
     int[] lastVariableUse = new int[composer.variables()];
@@ -65,7 +65,7 @@ final class ExpressionOrder {
     int[] opened = new int[64];
     int depth = 0;
     int clock = 0;
-    int arriving = expressions - 1;
+    int arriving = root;
     while (true) {
       if (arriving >= 0) {
         clock++;
@@ -94,7 +94,7 @@ final class ExpressionOrder {
         return;
       }
       int operator = open[depth - 1];
-      if (nextLevel[depth - 1] < composer.template(operator).levels()) {
+      if (nextLevel[depth - 1] < composer.levels(operator)) {
         arriving = composer.partAt(operator, nextLevel[depth - 1]++);
       } else {
         depth--;
@@ -115,7 +115,7 @@ final class ExpressionOrder {
         deepest[expression] = level[composer.variableOf(expression)];
       } else {
         int most = -1;
-        for (int l = composer.template(expression).levels() - 1; l >= 0; l--) {
+        for (int l = composer.levels(expression) - 1; l >= 0; l--) {
           most = Math.max(most, deepest[composer.partAt(expression, l)]);
         }
         deepest[expression] = most;

@@ -144,6 +144,15 @@ final class FrontierPlan {
     return count - 1;
   }
 
+  /** The most nodes on the frontier at any moment of the sweep. */
+  int width() {
+    int width = 0;
+    for (int[] nodes : frontier) {
+      width = Math.max(width, nodes.length);
+    }
+    return width;
+  }
+
   int operations() {
     return operations;
   }

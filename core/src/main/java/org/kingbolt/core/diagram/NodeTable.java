@@ -32,6 +32,14 @@ final class NodeTable {
     return table.level(id);
   }
 
+  int low(int id) {
+    return table.low(id);
+  }
+
+  int high(int id) {
+    return table.high(id);
+  }
+
   int size() {
     return table.size();
   }

@@ -41,6 +41,63 @@ final class StateSweep {
     return layers.diagram();
   }
 
+  /**
+   * Sums up both probabilities on the way, without making a template: two layers of states are all
+   * that is held.
+   *
+   * @param works indexed by slot
+   * @param fails indexed by slot
+   * @param result receives the probability of working and of failing, each a sum of non-negative
+   *     terms
+   */
+  static void expect(
+      StateRule rule, double[] works, double[] fails, double[] result, WorkMeter meter) {
+    result[0] = 0;
+    result[1] = 0;
+    StateWords next = new StateWords();
+    int settled = rule.start(next);
+    if (settled != StateRule.CONTINUES) {
+      result[settled == StateRule.SETTLED_WORKS ? 0 : 1] = 1;
+      return;
+    }
+    StateLayer present = new StateLayer();
+    StateLayer following = new StateLayer();
+    present.add(next);
+    double[] mass = {1};
+    double[] nextMass = new double[16];
+    for (int step = 0; present.count() > 0; step++) {
+      double up = works[rule.slot(step)];
+      double down = fails[rule.slot(step)];
+      int count = present.count();
+      for (int state = 0; state < count; state++) {
+        meter.at((following.words() + present.words()) >> 2);
+        if (nextMass.length < following.count() + 2) {
+          nextMass = Arrays.copyOf(nextMass, nextMass.length << 1);
+        }
+        int low = follow(rule, step, false, present, state, next, following);
+        add(low, down * mass[state], nextMass, result);
+        int high = follow(rule, step, true, present, state, next, following);
+        add(high, up * mass[state], nextMass, result);
+      }
+      StateLayer spare = present;
+      present = following;
+      following = spare;
+      following.clear();
+      double[] spareMass = mass;
+      mass = nextMass;
+      nextMass = spareMass;
+      Arrays.fill(nextMass, 0);
+    }
+  }
+
+  private static void add(int to, double mass, double[] nextMass, double[] result) {
+    if (to >= 0) {
+      nextMass[to] += mass;
+    } else {
+      result[to == StateRule.SETTLED_WORKS ? 0 : 1] += mass;
+    }
+  }
+
   private static int follow(
       StateRule rule,
       int step,

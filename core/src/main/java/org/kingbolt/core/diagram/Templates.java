@@ -1,5 +1,6 @@
 package org.kingbolt.core.diagram;
 
+import java.util.ArrayList;
 import java.util.BitSet;
 import java.util.List;
 
@@ -11,6 +12,12 @@ import java.util.List;
  */
 public final class Templates {
 
+  /** Series and parallel operators of up to so many slots are made once. */
+  private static final int MOST_CHAINS = 64;
+
+  private static final List<Operator> ALL = chains(true);
+  private static final List<Operator> ANY = chains(false);
+
   private Templates() {}
 
   /**
@@ -19,8 +26,8 @@ public final class Templates {
    * @param works its value
    * @return a diagram without levels
    */
-  public static Diagram constant(boolean works) {
-    return Diagram.constant(works);
+  public static Operator constant(boolean works) {
+    return Operator.of(Diagram.constant(works));
   }
 
   /**
@@ -28,13 +35,24 @@ public final class Templates {
    *
    * @param k from 1 to n
    * @param n the number of slots
-   * @param meter hears of every node
-   * @return a template with {@code k (n - k + 1)} nodes; time is linear in that
+   * @return an operator whose template has {@code k (n - k + 1)} nodes; time is linear in that
    */
-  public static Diagram atLeast(int k, int n, WorkMeter meter) {
-    if (k == 1 || k == n) {
-      return Layers.chain(n, k == n);
+  public static Operator atLeast(int k, int n) {
+    if (n <= MOST_CHAINS && (k == 1 || k == n)) {
+      return (k == n ? ALL : ANY).get(n);
     }
+    return k == 1 || k == n ? Operator.of(Layers.chain(n, k == n)) : Operator.threshold(k, n);
+  }
+
+  private static List<Operator> chains(boolean series) {
+    List<Operator> chains = new ArrayList<>();
+    for (int n = 0; n <= MOST_CHAINS; n++) {
+      chains.add(Operator.of(n == 0 ? Diagram.constant(series) : Layers.chain(n, series)));
+    }
+    return List.copyOf(chains);
+  }
+
+  static Diagram threshold(int k, int n, WorkMeter meter) {
     Layers layers = new Layers();
     long held = 0;
     for (int i = 0; i < n; i++) {
@@ -59,11 +77,10 @@ public final class Templates {
    *
    * @param demand from 1 to the sum of the weights
    * @param weights one a slot, none negative, with a sum that fits a long
-   * @param meter hears of every state
-   * @return a template with at most min(demand, 2^i) nodes on level i
+   * @return an operator whose template has at most min(demand, 2^i) nodes on level i
    */
-  public static Diagram capacity(long demand, long[] weights, WorkMeter meter) {
-    return StateSweep.template(new CapacityRule(demand, weights), meter);
+  public static Operator capacity(long demand, long[] weights) {
+    return Operator.swept(new CapacityRule(demand, weights));
   }
 
   /**
@@ -72,11 +89,11 @@ public final class Templates {
    * @param k from 1 to n
    * @param n the number of slots
    * @param around whether the last slot is a neighbour of the first
-   * @param meter hears of every state
-   * @return a template with at most {@code n k} nodes, or {@code n k^2} around a circle
+   * @return an operator whose template has at most {@code n k} nodes, or {@code n k^2} around a
+   *     circle
    */
-  public static Diagram withoutFailureRun(int k, int n, boolean around, WorkMeter meter) {
-    return StateSweep.template(new RunRule(k, n, around), meter);
+  public static Operator withoutFailureRun(int k, int n, boolean around) {
+    return Operator.swept(new RunRule(k, n, around));
   }
 
   /**
@@ -87,10 +104,11 @@ public final class Templates {
    * @param sets none empty, at least one; sorted or not, minimal or not
    * @param paths whether the sets are path sets, or else cut sets
    * @param meter hears of every node
-   * @return the reduced diagram, slots in increasing order. Cost: the sets are joined pairwise, so
-   *     that no set is touched more than a logarithmic number of times; sizes depend on the family.
+   * @return an operator whose template is the reduced diagram, slots in increasing order. Cost: the
+   *     sets are joined pairwise, so that no set is touched more than a logarithmic number of
+   *     times; sizes depend on the family.
    */
-  public static Diagram family(int n, List<BitSet> sets, boolean paths, WorkMeter meter) {
+  public static Operator family(int n, List<BitSet> sets, boolean paths, WorkMeter meter) {
     NodeTable table = new NodeTable(n, meter);
     int[] made = new int[sets.size()];
     for (int i = 0; i < made.length; i++) {
@@ -114,7 +132,7 @@ public final class Templates {
         made[count >> 1] = made[count - 1];
       }
     }
-    return table.diagram(made[0], StateSweep.identity(n));
+    return Operator.of(table.diagram(made[0], StateSweep.identity(n)));
   }
 
   /**
@@ -141,12 +159,16 @@ public final class Templates {
   }
 
   /**
-   * The dual of a template: works exactly where the template fails with every slot inverted.
+   * The dual of an operator: works exactly where it fails with every slot inverted.
    *
-   * @param template any template
-   * @return a template of the same size and order
+   * @param operator any operator
+   * @return an operator of the same size and order
    */
-  public static Diagram dual(Diagram template) {
+  public static Operator dual(Operator operator) {
+    return Operator.dual(operator);
+  }
+
+  static Diagram dual(Diagram template) {
     int size = template.size();
     int[] low = new int[size];
     int[] high = new int[size];
