@@ -18,23 +18,49 @@ final class Compilation {
 
   static CoherentSystem compile(Structure structure, Budget budget) {
     WorkMeter meter = meter(budget);
-    return new CoherentSystem(structure, within(() -> expression(structure, meter).compose(meter)));
+    return system(structure, new Numbering(structure), meter, Composer::compose);
   }
 
   /** The probability alone, without a diagram of the whole. */
   static Probability reliability(Structure structure, Probabilities p, Budget budget) {
+    Numbering numbering = new Numbering(structure);
     List<Probability> values =
-        Check.notNull(p, "probabilities").forComponents(structure.components());
+        Check.notNull(p, "probabilities").forComponents(numbering.components());
     double[] working = values.stream().mapToDouble(Probability::working).toArray();
     double[] failing = values.stream().mapToDouble(Probability::failing).toArray();
     WorkMeter meter =
         Check.notNull(budget, "budget").start("working out the reliability without a diagram");
-    double[] both = within(() -> expression(structure, meter).expect(working, failing, meter));
+    double[] both =
+        within(
+            () -> {
+              Composer composer = new Composer();
+              int root = express(numbering, composer, meter);
+              return composer.expect(root, working, failing, meter);
+            });
     return Probability.computed(both[0], both[1]);
   }
 
   static int widestFrontier(Structure structure) {
-    return expression(structure, WorkMeter.UNLIMITED).composer.widestFrontier();
+    Composer composer = new Composer();
+    express(new Numbering(structure), composer, WorkMeter.UNLIMITED);
+    return composer.widestFrontier();
+  }
+
+  /** How an expression becomes a diagram. */
+  private interface Step {
+    Diagram compose(Composer composer, int root, WorkMeter meter);
+  }
+
+  private static CoherentSystem system(
+      Structure structure, Numbering numbering, WorkMeter meter, Step step) {
+    Diagram diagram =
+        within(
+            () -> {
+              Composer composer = new Composer();
+              int root = express(numbering, composer, meter);
+              return step.compose(composer, root, meter);
+            });
+    return new CoherentSystem(structure, numbering.components(), diagram);
   }
 
   private static <T> T within(Supplier<T> work) {
@@ -46,7 +72,8 @@ final class Compilation {
   }
 
   static CoherentSystem compile(Structure structure, List<String> order, Budget budget) {
-    List<String> components = structure.components();
+    Numbering numbering = new Numbering(structure);
+    List<String> components = numbering.components();
     Map<String, Integer> numbers = numbers(components);
     Set<String> rest = new HashSet<>(components);
     int[] variables = new int[components.size()];
@@ -70,9 +97,11 @@ final class Compilation {
               + Check.listed(components.stream().filter(rest::contains).toList())
               + "; name every component once");
     }
-    WorkMeter meter = meter(budget);
-    return new CoherentSystem(
-        structure, within(() -> expression(structure, meter).compose(variables, meter)));
+    return system(
+        structure,
+        numbering,
+        meter(budget),
+        (composer, root, meter) -> composer.compose(root, variables, meter));
   }
 
   private static WorkMeter meter(Budget budget) {
@@ -87,49 +116,21 @@ final class Compilation {
     return numbers;
   }
 
-  /** A structure as an expression of a composer. */
-  private record Expression(Composer composer, int root) {
-
-    Diagram compose(WorkMeter meter) {
-      return composer.compose(root, meter);
+  /** Adds a structure to a composer, with its components in order as variables. */
+  private static int express(Numbering numbering, Composer composer, WorkMeter meter) {
+    int[] made = new int[numbering.size()];
+    for (int number = 0; number < made.length; number++) {
+      Structure part = numbering.structure(number);
+      if (part instanceof ComponentStructure) {
+        made[number] = composer.variable();
+      } else {
+        int[] slots = new int[part.parts().size()];
+        for (int slot = 0; slot < slots.length; slot++) {
+          slots[slot] = made[numbering.part(number, slot)];
+        }
+        made[number] = part.express(composer, slots, meter);
+      }
     }
-
-    Diagram compose(int[] order, WorkMeter meter) {
-      return composer.compose(root, order, meter);
-    }
-
-    double[] expect(double[] working, double[] failing, WorkMeter meter) {
-      return composer.expect(root, working, failing, meter);
-    }
-  }
-
-  /** Equal sub-structures become one expression. */
-  private static Expression expression(Structure structure, WorkMeter meter) {
-    Map<String, Integer> numbers = numbers(structure.components());
-    Composer composer = new Composer(numbers.size());
-    Map<Structure, Integer> made = new HashMap<>();
-    int root = -1;
-    for (Structure part : Fold.postOrder(structure)) {
-      Integer known = made.get(part);
-      root = known != null ? known : add(composer, part, numbers, made, meter);
-      made.put(part, root);
-    }
-    return new Expression(composer, root);
-  }
-
-  private static int add(
-      Composer composer,
-      Structure part,
-      Map<String, Integer> numbers,
-      Map<Structure, Integer> made,
-      WorkMeter meter) {
-    if (part instanceof ComponentStructure component) {
-      return composer.variable(numbers.getOrDefault(component.name(), -1));
-    }
-    int[] slots = new int[part.parts().size()];
-    for (int i = 0; i < slots.length; i++) {
-      slots[i] = made.getOrDefault(part.parts().get(i), -1);
-    }
-    return part.express(composer, slots, meter);
+    return made[made.length - 1];
   }
 }
