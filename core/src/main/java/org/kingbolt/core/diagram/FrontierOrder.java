@@ -4,13 +4,25 @@ import java.util.Arrays;
 
 /**
  * Chooses the order in which the frontier method meets the nodes of a network: a greedy sweep that
- * keeps the frontier narrow, tried from several starts; the cheapest by estimate is kept.
+ * keeps the frontier narrow, tried from several starts, and where the sweep promises to be costly a
+ * beam search; the cheapest by estimate is kept.
  *
- * <p>Deterministic. Cost: starts × nodes × frontier width × degree.
+ * <p>Deterministic. Cost: starts × nodes × frontier width × degree, and that of {@link
+ * FrontierBeam}.
  */
 final class FrontierOrder {
 
   private static final int STARTS = 32;
+
+  /** The beam is as wide as the likely cost of the sweep is worth. */
+  private static final int NARROWEST_BEAM = 12;
+
+  private static final int WIDEST_BEAM = 512;
+
+  /** No search is made for sweeps that promise to cost less. */
+  private static final double CHEAP = 1_000;
+
+  private static final double STATES_A_STEP = 20;
 
   /** Assumed growth of the number of states with one more frontier node. */
   private static final double GROWTH = 2.2;
@@ -39,7 +51,59 @@ final class FrontierOrder {
         best = order;
       }
     }
+    if (bestCost > CHEAP) {
+      double worth = bestCost / (STATES_A_STEP * reached.length);
+      int beam = (int) Math.max(NARROWEST_BEAM, Math.min(WIDEST_BEAM, worth));
+      int[] order = FrontierBeam.order(search.neighbours(), reached, beam);
+      if (search.costOf(order) < bestCost) {
+        best = order;
+      }
+    }
     return best;
+  }
+
+  /** The number of states that meeting some links is likely to cost. */
+  static double cost(int width, int links) {
+    return Math.pow(GROWTH, width) * links;
+  }
+
+  private int[][] neighbours() {
+    int[][] neighbours = new int[problem.nodes()][];
+    for (int node = 0; node < neighbours.length; node++) {
+      int here = node;
+      neighbours[node] =
+          Arrays.stream(linksAt[node])
+              .map(link -> problem.otherEnd(link, here))
+              .sorted()
+              .distinct()
+              .toArray();
+    }
+    return neighbours;
+  }
+
+  /** The estimated cost of a sweep in a given order. */
+  private double costOf(int[] order) {
+    boolean[] swept = new boolean[problem.nodes()];
+    int[] unswept = new int[problem.nodes()];
+    for (int node = 0; node < unswept.length; node++) {
+      unswept[node] = linksAt[node].length;
+    }
+    double sum = 0;
+    int width = 0;
+    for (int node : order) {
+      swept[node] = true;
+      int links = 0;
+      int leaving = 0;
+      for (int link : linksAt[node]) {
+        int other = problem.otherEnd(link, node);
+        unswept[other]--;
+        links += swept[other] ? 1 : 0;
+        leaving += swept[other] && unswept[other] == 0 ? 1 : 0;
+      }
+      sum += cost(width + 1, links);
+      width += (unswept[node] > 0 ? 1 : 0) - leaving;
+    }
+    return sum;
   }
 
   /** Greedy sweep; leaves its estimated cost in {@link #cost}. */
@@ -52,9 +116,7 @@ final class FrontierOrder {
     for (int node = 0; node < nodes; node++) {
       unplaced[node] = linksAt[node].length;
     }
-    cost = 0;
     int placed = 0;
-    int width = 0;
     int next = start;
     int oldest = 0;
     while (next >= 0) {
@@ -63,20 +125,15 @@ final class FrontierOrder {
       for (int link : linksAt[next]) {
         int other = problem.otherEnd(link, next);
         unplaced[other]--;
-        if (position[other] >= 0 && unplaced[other] == 0) {
-          width--;
-        }
       }
-      if (unplaced[next] > 0) {
-        width++;
-      }
-      cost += Math.pow(GROWTH, width) * linksAt[next].length;
       while (oldest < placed && unplaced[order[oldest]] == 0) {
         oldest++;
       }
       next = cheapestNeighbour(order, oldest, placed, position, unplaced);
     }
-    return Arrays.copyOf(order, placed);
+    int[] sweep = Arrays.copyOf(order, placed);
+    cost = costOf(sweep);
+    return sweep;
   }
 
   /** The unplaced neighbour that widens the frontier least; among equals, of the oldest node. */

@@ -7,8 +7,8 @@ import java.util.Deque;
 /**
  * Takes a network apart before it is swept: links in parallel and in series become one, dead ends
  * go, terminals that hang on one link pass their question on, links that cannot fail are
- * contracted, and where single nodes cut the network each biconnected piece becomes a question of
- * its own. Every step keeps the structure function, in terms of the original parts.
+ * contracted, where single nodes cut the network each biconnected piece becomes a question of its
+ * own, and a part that hangs on two nodes becomes one link. Every step keeps the structure function, in terms of the original parts.
  *
  * <p>Source: Moore &amp; Shannon 1956 for series and parallel; Satyanarayana &amp; Chang, Network
  * reliability and the factoring theorem, Networks 13 (1983) 107 for the others. Cost: nearly linear
@@ -47,6 +47,16 @@ final class NetworkReducer {
       }
       graph.wake(node);
     }
+    run(graph);
+  }
+
+  private NetworkReducer(Composer composer, boolean dual, NetworkGraph graph) {
+    this.composer = composer;
+    this.dual = dual;
+    run(graph);
+  }
+
+  private void run(NetworkGraph graph) {
     open.push(graph);
     while (!open.isEmpty()) {
       reduce(open.pop());
@@ -98,8 +108,17 @@ final class NetworkReducer {
         }
         return;
       }
+      if (NetworkModules.replace(graph, this)) {
+        open.push(graph);
+        return;
+      }
     }
     close(graph);
+  }
+
+  /** The expression of a part that stands between two nodes and holds no such part itself. */
+  int module(NetworkGraph part) {
+    return new NetworkReducer(composer, dual, part).expression();
   }
 
   private void takeNode(NetworkGraph graph, int node) {
