@@ -143,6 +143,8 @@ public final class MinimalSets implements Iterable<Set<String>> {
    * @throws IllegalArgumentException if members have no probability
    */
   public double probability(Set<String> set, Probabilities p) {
+    Check.notNull(set, "set");
+    Check.notNull(p, "probabilities");
     double product = 1;
     for (Probability value : p.forComponents(List.copyOf(set))) {
       product *= side(value);

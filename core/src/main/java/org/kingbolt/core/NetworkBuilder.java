@@ -55,7 +55,7 @@ public final class NetworkBuilder {
    *     has no components
    */
   public NetworkBuilder link(Structure part, String a, String b) {
-    return add(requirePart(part, a, b), new Link(a, b, false, false));
+    return add(requirePart("link", part, a, b), new Link(a, b, false, false));
   }
 
   /**
@@ -82,7 +82,7 @@ public final class NetworkBuilder {
    *     has no components
    */
   public NetworkBuilder arc(Structure part, String from, String to) {
-    return add(requirePart(part, from, to), new Link(from, to, true, false));
+    return add(requirePart("arc", part, from, to), new Link(from, to, true, false));
   }
 
   /**
@@ -133,7 +133,8 @@ public final class NetworkBuilder {
    */
   public NetworkBuilder node(String node, Structure part) {
     Check.name(node, "network node");
-    GateStructure.requireComponents("node " + Check.quoted(node), Check.notNull(part, "part"));
+    String where = "node " + Check.quoted(node);
+    GateStructure.requireComponents(where, Check.notNull(part, where + ": the part"));
     Structure before = nodeParts.get(node);
     if (before != null) {
       throw new IllegalStateException(
@@ -198,7 +199,9 @@ public final class NetworkBuilder {
     requireTerminals("reachingAllFrom", 1, source);
     if (nodes.size() < 2) {
       throw new IllegalArgumentException(
-          "reachingAllFrom: the network has no node besides " + Check.quoted(source));
+          "reachingAllFrom: the network has no node besides "
+              + Check.quoted(source)
+              + "; add a link or an arc to another");
     }
     Set<String> order = new LinkedHashSet<>();
     order.add(source);
@@ -236,8 +239,9 @@ public final class NetworkBuilder {
     return this;
   }
 
-  private static Structure requirePart(Structure part, String from, String to) {
-    GateStructure.requireComponents("link from " + from + " to " + to, Check.notNull(part, "part"));
+  private static Structure requirePart(String kind, Structure part, String from, String to) {
+    String where = kind + " from " + Check.quoted(from) + " to " + Check.quoted(to);
+    GateStructure.requireComponents(where, Check.notNull(part, where + ": the part"));
     return part;
   }
 
@@ -283,7 +287,8 @@ public final class NetworkBuilder {
       throw new NotCoherentException(
           "network: "
               + Check.listed(terminals)
-              + " are connected by links that cannot fail, so the structure always works");
+              + " are connected by links that cannot fail, so the structure always works; let some of"
+              + " them depend on a component");
     }
     Arrays.fill(states, true);
     if (!network.evaluate(states)) {

@@ -171,6 +171,7 @@ public final class Probabilities implements Serializable {
    * @throws IllegalArgumentException if components are not covered; the message lists all of them
    */
   public List<Probability> forComponents(List<String> components) {
+    Check.notNull(components, "the list of components");
     List<Probability> found = new ArrayList<>(components.size());
     List<String> missing = new ArrayList<>();
     for (String component : components) {
@@ -184,7 +185,7 @@ public final class Probabilities implements Serializable {
     if (!missing.isEmpty()) {
       throw new IllegalArgumentException(
           "no probability for "
-              + Check.listed(missing)
+              + Check.listedInFull(missing)
               + "; set each with Probabilities.with, or all at once with Probabilities.all");
     }
     return found;

@@ -105,6 +105,7 @@ public abstract sealed class Structure implements Serializable
    *     has no components
    */
   public static Structure series(List<Structure> parts) {
+    Check.notNull(parts, GateStructure.SERIES + ": the list of parts");
     return GateStructure.described(GateStructure.SERIES, parts.size(), parts);
   }
 
@@ -255,7 +256,8 @@ public abstract sealed class Structure implements Serializable
    *     blank or listed twice
    */
   public static Structure withoutFailureRun(int k, List<String> names) {
-    return RunStructure.described(k, named(array(names), RunStructure.LINE), false);
+    return RunStructure.described(
+        k, named(array(names, RunStructure.LINE), RunStructure.LINE), false);
   }
 
   /**
@@ -281,7 +283,8 @@ public abstract sealed class Structure implements Serializable
    *     blank or listed twice
    */
   public static Structure withoutFailureRunAround(int k, List<String> names) {
-    return RunStructure.described(k, named(array(names), RunStructure.CIRCLE), true);
+    return RunStructure.described(
+        k, named(array(names, RunStructure.CIRCLE), RunStructure.CIRCLE), true);
   }
 
   /**
@@ -630,7 +633,7 @@ public abstract sealed class Structure implements Serializable
         .toList();
   }
 
-  private static String[] array(List<String> names) {
-    return Check.notNull(names, "the list of names").toArray(new String[0]);
+  private static String[] array(List<String> names, String where) {
+    return Check.notNull(names, where + ": the list of names").toArray(new String[0]);
   }
 }
