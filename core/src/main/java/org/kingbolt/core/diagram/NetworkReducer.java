@@ -8,7 +8,8 @@ import java.util.Deque;
  * Takes a network apart before it is swept: links in parallel and in series become one, dead ends
  * go, terminals that hang on one link pass their question on, links that cannot fail are
  * contracted, where single nodes cut the network each biconnected piece becomes a question of its
- * own, and a part that hangs on two nodes becomes one link. Every step keeps the structure function, in terms of the original parts.
+ * own, and a part that hangs on two nodes becomes one link. Every step keeps the structure
+ * function, in terms of the original parts.
  *
  * <p>Source: Moore &amp; Shannon 1956 for series and parallel; Satyanarayana &amp; Chang, Network
  * reliability and the factoring theorem, Networks 13 (1983) 107 for the others. Cost: nearly linear
