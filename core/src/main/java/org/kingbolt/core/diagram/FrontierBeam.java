@@ -18,7 +18,18 @@ import java.util.Set;
 final class FrontierBeam {
 
   /** The set of nodes that a partial order has swept, and those of them with unswept neighbours. */
-  private record Partial(long[] swept, int[] frontier, long hash, double cost) {
+  private static final class Partial {
+    final long[] swept;
+    final int[] frontier;
+    final long hash;
+    final double cost;
+
+    Partial(long[] swept, int[] frontier, long hash, double cost) {
+      this.swept = swept;
+      this.frontier = frontier;
+      this.hash = hash;
+      this.cost = cost;
+    }
 
     boolean has(int node) {
       return (swept[node >> 6] >>> node & 1) != 0;
@@ -37,6 +48,7 @@ final class FrontierBeam {
   private final int[] nodes;
   private final int beam;
   private final long[] label;
+  private final WorkMeter meter;
 
   /** By step and place in the beam: the node swept, and the place of the partial order before. */
   private final List<int[]> swept = new ArrayList<>();
@@ -44,7 +56,8 @@ final class FrontierBeam {
   private final List<int[]> origin = new ArrayList<>();
   private List<Partial> partials = new ArrayList<>();
 
-  private FrontierBeam(int[][] neighbours, int[] nodes, int beam) {
+  private FrontierBeam(int[][] neighbours, int[] nodes, int beam, WorkMeter meter) {
+    this.meter = meter;
     this.neighbours = neighbours;
     this.nodes = nodes;
     this.beam = beam;
@@ -62,10 +75,11 @@ final class FrontierBeam {
    * @param neighbours of each node, each once
    * @param nodes a connected set of nodes
    * @param beam how many partial orders to follow
+   * @param meter hears of every continuation
    * @return the nodes in the order of the cheapest sweep found
    */
-  static int[] order(int[][] neighbours, int[] nodes, int beam) {
-    return new FrontierBeam(neighbours, nodes, beam).search();
+  static int[] order(int[][] neighbours, int[] nodes, int beam, WorkMeter meter) {
+    return new FrontierBeam(neighbours, nodes, beam, meter).search();
   }
 
   private int[] search() {
@@ -98,6 +112,7 @@ final class FrontierBeam {
         for (int node : neighbours[edge]) {
           if (!partial.has(node) && seenBy[node] != i + 1) {
             seenBy[node] = i + 1;
+            meter.at(steps.size());
             double cost = partial.cost + FrontierOrder.cost(widthAfter(partial, node), 1);
             steps.add(new Step(i, node, cost, partial.hash ^ label[node]));
           }

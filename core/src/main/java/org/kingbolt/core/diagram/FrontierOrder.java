@@ -22,6 +22,9 @@ final class FrontierOrder {
   /** No search is made for sweeps that promise to cost less. */
   private static final double CHEAP = 1_000;
 
+  /** Nor for those that no search can mend. */
+  private static final double HOPELESS = 1e18;
+
   private static final double STATES_A_STEP = 20;
 
   /** Assumed growth of the number of states with one more frontier node. */
@@ -29,16 +32,18 @@ final class FrontierOrder {
 
   private final NetworkProblem problem;
   private final int[][] linksAt;
+  private final WorkMeter meter;
   private double cost;
 
-  private FrontierOrder(NetworkProblem problem) {
+  private FrontierOrder(NetworkProblem problem, WorkMeter meter) {
     this.problem = problem;
+    this.meter = meter;
     this.linksAt = problem.linksAt();
   }
 
   /** The nodes connected with the source, in sweeping order. */
-  static int[] best(NetworkProblem problem) {
-    FrontierOrder search = new FrontierOrder(problem);
+  static int[] best(NetworkProblem problem, WorkMeter meter) {
+    FrontierOrder search = new FrontierOrder(problem, meter);
     int[] best = search.sweepFrom(problem.source);
     double bestCost = search.cost;
     int[] reached = best.clone();
@@ -51,10 +56,10 @@ final class FrontierOrder {
         best = order;
       }
     }
-    if (bestCost > CHEAP) {
+    if (bestCost > CHEAP && bestCost < HOPELESS) {
       double worth = bestCost / (STATES_A_STEP * reached.length);
       int beam = (int) Math.max(NARROWEST_BEAM, Math.min(WIDEST_BEAM, worth));
-      int[] order = FrontierBeam.order(search.neighbours(), reached, beam);
+      int[] order = FrontierBeam.order(search.neighbours(), reached, beam, meter);
       if (search.costOf(order) < bestCost) {
         best = order;
       }
@@ -120,6 +125,7 @@ final class FrontierOrder {
     int next = start;
     int oldest = 0;
     while (next >= 0) {
+      meter.at(nodes >> 3);
       position[next] = placed;
       order[placed++] = next;
       for (int link : linksAt[next]) {
