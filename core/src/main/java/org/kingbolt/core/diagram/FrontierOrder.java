@@ -60,11 +60,22 @@ final class FrontierOrder {
       double worth = bestCost / (STATES_A_STEP * reached.length);
       int beam = (int) Math.max(NARROWEST_BEAM, Math.min(WIDEST_BEAM, worth));
       int[] order = FrontierBeam.order(search.neighbours(), reached, beam, meter);
-      if (search.costOf(order) < bestCost) {
-        best = order;
-      }
+      best = search.cheaper(best, order);
+      best = search.cheaper(best, backwards(best));
     }
     return best;
+  }
+
+  private int[] cheaper(int[] order, int[] other) {
+    return costOf(other) < costOf(order) ? other : order;
+  }
+
+  private static int[] backwards(int[] order) {
+    int[] result = new int[order.length];
+    for (int i = 0; i < order.length; i++) {
+      result[i] = order[order.length - 1 - i];
+    }
+    return result;
   }
 
   /** The number of states that meeting some links is likely to cost. */
@@ -95,6 +106,8 @@ final class FrontierOrder {
     }
     double sum = 0;
     int width = 0;
+    int terminals = 0;
+    boolean pair = isPair();
     for (int node : order) {
       swept[node] = true;
       int links = 0;
@@ -105,10 +118,20 @@ final class FrontierOrder {
         links += swept[other] ? 1 : 0;
         leaving += swept[other] && unswept[other] == 0 ? 1 : 0;
       }
-      sum += cost(width + 1, links);
+      terminals += problem.terminal(node) ? 1 : 0;
+      sum += cost(width + 1, links) * (pair ? Math.pow(width / 2 + 1, terminals) : 1);
       width += (unswept[node] > 0 ? 1 : 0) - leaving;
     }
     return sum;
+  }
+
+  /** Whether there is one target only; the block of either terminal is then one of many. */
+  private boolean isPair() {
+    int targets = 0;
+    for (boolean isTarget : problem.target) {
+      targets += isTarget ? 1 : 0;
+    }
+    return targets == 1;
   }
 
   /** Greedy sweep; leaves its estimated cost in {@link #cost}. */
