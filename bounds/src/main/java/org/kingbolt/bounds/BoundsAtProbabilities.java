@@ -146,4 +146,14 @@ public final class BoundsAtProbabilities {
     }
     product.end();
   }
+
+  /**
+   * Says what this is and what to call on it.
+   *
+   * @return one line
+   */
+  @Override
+  public String toString() {
+    return "Bounds[" + system + "] at given probabilities; call esaryProschan() or minMax()";
+  }
 }

@@ -47,9 +47,10 @@ public final class MinimalSets implements Iterable<Set<String>> {
    * Counts the sets without listing them.
    *
    * @return the exact number
+   * @throws BudgetExceededException if the number of nodes is too large for the heap
    */
   public BigInteger count() {
-    return countBySize().stream().reduce(BigInteger.ZERO, BigInteger::add);
+    return family.count(Budget.ofHeap().start("counting minimal sets"));
   }
 
   /**
