@@ -86,7 +86,8 @@ public final class CoherentSystem implements Serializable {
    *
    * @param p the components' probabilities; components must fail independently
    * @return both sides, each to a relative error of a few units in the last place for every level
-   *     of the diagram. Cost: one scan.
+   *     of the diagram, as long as it is not below the range of a double, about 1e-308; what is
+   *     smaller comes out as 0. Cost: one scan.
    * @throws IllegalArgumentException if components have no probability; the message lists them
    */
   public Probability reliability(Probabilities p) {
