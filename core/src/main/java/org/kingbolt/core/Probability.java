@@ -72,7 +72,7 @@ public final class Probability implements Comparable<Probability>, Serializable 
   public static Probability of(double working, double failing) {
     double p = Check.probability(working, "probability of working");
     double q = Check.probability(failing, "probability of failing");
-    if (!(Math.abs(p + q - 1) <= SUM_TOLERANCE)) {
+    if (!addUp(p, q)) {
       throw new IllegalArgumentException(
           "working "
               + p
@@ -84,6 +84,11 @@ public final class Probability implements Comparable<Probability>, Serializable 
               + " Probability.failing");
     }
     return new Probability(p, q);
+  }
+
+  /** Whether two sides add up to 1. */
+  static boolean addUp(double working, double failing) {
+    return Math.abs(working + failing - 1) <= SUM_TOLERANCE;
   }
 
   /**
