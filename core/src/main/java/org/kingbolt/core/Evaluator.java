@@ -70,7 +70,7 @@ public final class Evaluator {
    * @param working by component: the probability of working, from 0 to 1
    * @param failing by component: the probability of having failed, from 0 to 1
    * @throws IllegalArgumentException if an array has not one value for each component, a number is
-   *     NaN or outside [0, 1], or the two sides of a component do not add up to 1 within 1e-8; the
+   *     NaN or outside [0, 1], or the two sides of a component do not add up to 1 within 1e-12; the
    *     message names the component
    */
   public void evaluate(double[] working, double[] failing) {
@@ -166,7 +166,7 @@ public final class Evaluator {
    * @param failing its probability of having failed instead
    * @return from 0 to 1; for a component that never matters, {@link #working()}
    * @throws IllegalArgumentException if a number is NaN or outside [0, 1], or if the two do not add
-   *     up to 1 within 1e-8
+   *     up to 1 within 1e-12
    * @throws IndexOutOfBoundsException if there is no such component
    * @throws IllegalStateException if nothing has been evaluated
    */
@@ -184,7 +184,7 @@ public final class Evaluator {
    * @param failing its probability of having failed instead
    * @return from 0 to 1; for a component that never matters, {@link #failing()}
    * @throws IllegalArgumentException if a number is NaN or outside [0, 1], or if the two do not add
-   *     up to 1 within 1e-8
+   *     up to 1 within 1e-12
    * @throws IndexOutOfBoundsException if there is no such component
    * @throws IllegalStateException if nothing has been evaluated
    */

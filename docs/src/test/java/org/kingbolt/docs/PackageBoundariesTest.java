@@ -96,6 +96,7 @@ class PackageBoundariesTest {
             "FrontierTooWideException",
             "MinimalSolutions",
             "NetworkProblem",
+            "Operator",
             "Scan",
             "SetDiagram",
             "SetWalk",
