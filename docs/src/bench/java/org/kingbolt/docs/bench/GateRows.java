@@ -64,7 +64,7 @@ final class GateRows {
     return new Prepared(
         structure.components().size(),
         "components",
-        "nodes",
+        Prepared.NODES,
         () -> structure.compile().diagram().nodeCount(),
         Map.of(
             "JDD",
@@ -78,7 +78,7 @@ final class GateRows {
     return new Prepared(
         components,
         "components",
-        "nodes",
+        Prepared.NODES,
         () -> structure.compile().diagram().nodeCount(),
         Map.of());
   }

@@ -21,8 +21,7 @@ public final class Measurements {
 
   private static final String HEAP = "-Xmx12g";
 
-  /** One line of the table holds at most one peer. */
-  private static final String NO_PEER = "–";
+  private static final String NOTHING = "–";
 
   private Measurements() {}
 
@@ -59,31 +58,40 @@ public final class Measurements {
   }
 
   private static void measure(Workload workload, Effort effort, Table table) {
+    List<String> cold = coldStart(workload.name(), true);
     List<Double> times = new ArrayList<>();
-    List<String> cold = List.of();
-    for (int i = 0; i < effort.coldStarts; i++) {
-      cold = coldStart(workload.name(), i == 0);
-      times.add(Double.parseDouble(cold.get(0)));
+    times.add(Double.parseDouble(cold.get(0)));
+    while (times.size() < effort.coldStarts) {
+      times.add(Double.parseDouble(coldStart(workload.name(), false).get(0)));
     }
     Collections.sort(times);
+    double first = times.get(times.size() / 2);
     double size = Double.parseDouble(cold.get(1));
     OptionalDouble ours = warm(workload, Prepared.OURS, effort);
-    double median = times.get(times.size() / 2);
     List<String> start =
         List.of(
             workload.name(),
             Table.number(size) + " " + cold.get(2),
-            Table.number(Double.parseDouble(cold.get(3))) + " " + cold.get(4),
-            ours.isPresent() ? Table.time(ours.getAsDouble()) : NO_PEER,
-            Table.time(ours.orElse(median) / size),
-            Table.time(median));
+            result(cold, 3),
+            ours.isPresent() ? Table.time(ours.getAsDouble()) : NOTHING,
+            Table.time(ours.orElse(first) / size),
+            Table.time(first));
     if (workload.peers().isEmpty()) {
-      table.add(start, NO_PEER, NO_PEER);
+      table.add(start, NOTHING, NOTHING);
     }
     for (String peer : workload.peers()) {
       double theirs = warm(workload, peer, effort).orElseThrow();
-      table.add(start, peer + " " + Table.time(theirs), Table.ratio(ours.orElseThrow() / theirs));
+      int number = cold.lastIndexOf(peer) + 1;
+      boolean differs = cold.get(4).equals(Prepared.NODES) && !cold.get(number).equals(cold.get(3));
+      table.add(
+          start,
+          peer + (differs ? ", " + result(cold, number) + "," : "") + " " + Table.time(theirs),
+          Table.ratio(ours.orElseThrow() / theirs));
     }
+  }
+
+  private static String result(List<String> cold, int line) {
+    return Table.number(Double.parseDouble(cold.get(line))) + " " + cold.get(4);
   }
 
   /** The median in nanoseconds. */

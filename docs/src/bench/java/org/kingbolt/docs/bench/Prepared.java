@@ -17,6 +17,7 @@ record Prepared(
     long size, String unit, String result, DoubleSupplier ours, Map<String, DoubleSupplier> peers) {
 
   static final String OURS = "ours";
+  static final String NODES = "nodes";
 
   DoubleSupplier side(String name) {
     return name.equals(OURS) ? ours : peers.getOrDefault(name, ours);

@@ -38,7 +38,7 @@ final class Table {
   }
 
   private static String threeDigits(double value) {
-    int decimals = value < 9.995 ? 2 : value < 99.95 ? 1 : 0;
+    int decimals = value < 0.9995 ? 3 : value < 9.995 ? 2 : value < 99.95 ? 1 : 0;
     return String.format(Locale.ROOT, "%." + decimals + "f", value);
   }
 
