@@ -65,11 +65,13 @@ final class Decomposition {
 
   private final Formula holder = Formula.of(Formula.Kind.PRODUCT);
   private final Deque<Pending> pending = new ArrayDeque<>();
+  private final Runnable pause;
   private int unresolved;
   private int symbols;
   private int depth;
 
-  private Decomposition(Structure structure) {
+  private Decomposition(Structure structure, Runnable pause) {
+    this.pause = pause;
     holder.operands.add(Formula.of(Formula.Kind.ONE));
     pending.push(new Pending(structure, holder, 0, 0, new Uses(structure)));
     while (!pending.isEmpty()) {
@@ -77,8 +79,13 @@ final class Decomposition {
     }
   }
 
-  static Decomposition of(Structure structure) {
-    return new Decomposition(structure);
+  /**
+   * Takes a structure apart.
+   *
+   * @param pause called once in a while; may end the work by throwing
+   */
+  static Decomposition of(Structure structure, Runnable pause) {
+    return new Decomposition(structure, pause);
   }
 
   Formula formula() {
@@ -93,7 +100,7 @@ final class Decomposition {
     Structure structure = item.structure;
     Uses uses = item.uses;
     if (structure instanceof NetworkStructure network) {
-      structure = NetworkReduction.of(network);
+      structure = NetworkReduction.of(network, pause);
       uses = new Uses(structure);
     }
     depth = Math.max(depth, item.depth);
