@@ -254,6 +254,7 @@ class BudgetTest {
             () -> system.signature(),
             () -> system.pivot("h0.0"),
             () -> sets.count(),
+            () -> sets.stream(),
             () -> sets.mostProbable(5, Probabilities.all(0.9)));
     for (Runnable question : questions) {
       Thread.currentThread().interrupt();
