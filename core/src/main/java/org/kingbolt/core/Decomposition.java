@@ -2,6 +2,7 @@ package org.kingbolt.core;
 
 import java.util.ArrayDeque;
 import java.util.ArrayList;
+import java.util.Collections;
 import java.util.Deque;
 import java.util.HashMap;
 import java.util.HashSet;
@@ -154,6 +155,7 @@ final class Decomposition {
   private static List<Structure> flattened(GateStructure gate, boolean series) {
     List<Structure> flat = new ArrayList<>();
     Set<Structure> seen = new HashSet<>();
+    Set<Structure> opened = Collections.newSetFromMap(new IdentityHashMap<>());
     Deque<Structure> open = new ArrayDeque<>();
     open.push(gate);
     while (!open.isEmpty()) {
@@ -161,12 +163,12 @@ final class Decomposition {
       boolean same =
           structure instanceof GateStructure inner
               && (series ? inner.isSeries() : inner.isParallel());
-      if (same) {
+      if (same && opened.add(structure)) {
         List<Structure> parts = structure.parts();
         for (int i = parts.size() - 1; i >= 0; i--) {
           open.push(parts.get(i));
         }
-      } else if (seen.add(structure)) {
+      } else if (!same && seen.add(structure)) {
         flat.add(structure);
       }
     }
