@@ -1,7 +1,9 @@
 package org.kingbolt.core;
 
+import java.util.Arrays;
 import java.util.HashMap;
 import java.util.HashSet;
+import java.util.IdentityHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
@@ -103,15 +105,45 @@ final class Compilation {
     }
   }
 
+  /** An operator over expressions: equal sub-structures, part by part, have equal shapes. */
+  private static final class Shape {
+    private final Structure operator;
+    private final int[] slots;
+
+    Shape(Structure operator, int[] slots) {
+      this.operator = operator;
+      this.slots = slots;
+    }
+
+    @Override
+    public boolean equals(Object other) {
+      return other instanceof Shape that
+          && Arrays.equals(slots, that.slots)
+          && operator.sameOperator(that.operator);
+    }
+
+    @Override
+    public int hashCode() {
+      return operator.hashCode();
+    }
+  }
+
   /** Equal sub-structures become one expression. */
   private static Expression expression(Structure structure, WorkMeter meter) {
     Map<String, Integer> numbers = numbers(structure.components());
     Composer composer = new Composer(numbers.size());
-    Map<Structure, Integer> made = new HashMap<>();
+    IdentityHashMap<Structure, Integer> made = new IdentityHashMap<>();
+    Map<Shape, Integer> byShape = new HashMap<>();
     int root = -1;
     for (Structure part : Fold.postOrder(structure)) {
-      Integer known = made.get(part);
-      root = known != null ? known : add(composer, part, numbers, made, meter);
+      int[] slots = new int[part.parts().size()];
+      for (int i = 0; i < slots.length; i++) {
+        slots[i] = made.getOrDefault(part.parts().get(i), -1);
+      }
+      Shape shape = new Shape(part, slots);
+      Integer known = byShape.get(shape);
+      root = known != null ? known : add(composer, part, numbers, slots, meter);
+      byShape.put(shape, root);
       made.put(part, root);
     }
     return new Expression(composer, root);
@@ -121,15 +153,10 @@ final class Compilation {
       Composer composer,
       Structure part,
       Map<String, Integer> numbers,
-      Map<Structure, Integer> made,
+      int[] slots,
       WorkMeter meter) {
-    if (part instanceof ComponentStructure component) {
-      return composer.variable(numbers.getOrDefault(component.name(), -1));
-    }
-    int[] slots = new int[part.parts().size()];
-    for (int i = 0; i < slots.length; i++) {
-      slots[i] = made.getOrDefault(part.parts().get(i), -1);
-    }
-    return part.express(composer, slots, meter);
+    return part instanceof ComponentStructure component
+        ? composer.variable(numbers.getOrDefault(component.name(), -1))
+        : part.express(composer, slots, meter);
   }
 }

@@ -68,7 +68,10 @@ public final class MinimalSets implements Iterable<Set<String>> {
   /**
    * Streams the sets, smallest first, made one at a time as they are asked for.
    *
-   * @return a sequential stream of unmodifiable sets
+   * @return a sequential stream of unmodifiable sets; it ends in a {@link BudgetExceededException}
+   *     where it needs more memory than {@link Budget#ofHeap()} allows, or the thread is
+   *     interrupted
+   * @throws BudgetExceededException if the heap is too small to begin with
    */
   public Stream<Set<String>> stream() {
     return StreamSupport.stream(
@@ -80,11 +83,12 @@ public final class MinimalSets implements Iterable<Set<String>> {
   /**
    * Goes through the sets in the order of {@link #stream()}.
    *
-   * @return an iterator for one thread
+   * @return an iterator for one thread, which may throw as the stream does
+   * @throws BudgetExceededException if the heap is too small to begin with
    */
   @Override
   public Iterator<Set<String>> iterator() {
-    SetWalk walk = family.walk();
+    SetWalk walk = family.walk(Budget.ofHeap().start("listing minimal sets"));
     return new Iterator<>() {
       private int @Nullable [] next = walk.next();
 

@@ -6,6 +6,7 @@ import java.util.LinkedHashMap;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.Set;
 import org.kingbolt.core.NetworkStructure.Link;
 import org.kingbolt.core.NetworkStructure.Question;
@@ -207,6 +208,11 @@ public final class NetworkBuilder {
     order.add(source);
     order.addAll(nodesInText());
     return structure(Question.ALL_FROM, List.copyOf(order));
+  }
+
+  /** What a node depends on by now, shortened for a message; nothing while it always works. */
+  Optional<String> dependence(String node) {
+    return Optional.ofNullable(nodeParts.get(node)).map(TextWriter::excerpt);
   }
 
   /** The nodes in order of their first mention in the text form: links, then failing nodes. */

@@ -99,7 +99,8 @@ final class RuleTable {
   private Structure structure() {
     Diagram diagram = Templates.truthTable(names.size(), works, WorkMeter.UNLIMITED);
     List<Set<String>> sets = new ArrayList<>();
-    SetWalk walk = MinimalSolutions.paths(diagram, WorkMeter.UNLIMITED).walk();
+    WorkMeter meter = WorkMeter.UNLIMITED;
+    SetWalk walk = MinimalSolutions.paths(diagram, meter).walk(meter);
     Set<String> mentioned = new HashSet<>();
     for (int[] set = walk.next(); set != null; set = walk.next()) {
       Set<String> path = new LinkedHashSet<>();

@@ -4,6 +4,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertNotEquals;
 import static org.junit.jupiter.api.Assertions.assertThrows;
+import static org.junit.jupiter.api.Assertions.assertTimeout;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 import static org.kingbolt.core.BudgetExceededException.Limit.INTERRUPT;
 import static org.kingbolt.core.BudgetExceededException.Limit.NODES;
@@ -19,6 +20,7 @@ import java.util.Map;
 import java.util.Random;
 import java.util.Set;
 import java.util.TreeSet;
+import java.util.concurrent.Callable;
 import java.util.concurrent.CountDownLatch;
 import java.util.concurrent.ExecutionException;
 import java.util.concurrent.FutureTask;
@@ -201,6 +203,31 @@ class BudgetTest {
     assertEquals(TIME, stopped.limit());
   }
 
+  /** Each of its steps is long work by itself. */
+  @Test
+  void time_endsDerivation() {
+    Structure grid = grid(8, 8).connecting("0.0", "7.7");
+    Budget budget = Budget.ofNodes(3_000).withTime(Duration.ofMillis(200));
+    BudgetExceededException stopped =
+        assertTimeout(
+            Duration.ofSeconds(5),
+            () -> assertThrows(BudgetExceededException.class, () -> Derivation.of(grid, budget)));
+    assertEquals(TIME, stopped.limit());
+  }
+
+  /** Before the first key is found. */
+  @Test
+  void time_endsDerivation_withinOneStep() {
+    Structure grid = grid(40, 40).connecting("0.0", "39.39");
+    Budget budget = Budget.ofNodes(3_000).withTime(Duration.ofMillis(200));
+    BudgetExceededException stopped =
+        assertTimeout(
+            Duration.ofSeconds(5),
+            () -> assertThrows(BudgetExceededException.class, () -> Derivation.of(grid, budget)));
+    assertEquals(TIME, stopped.limit());
+    assertEquals(1, stopped.reached());
+  }
+
   @ParameterizedTest
   @MethodSource({"compilations", "questions"})
   void interrupt(Work work) {
@@ -227,6 +254,7 @@ class BudgetTest {
             () -> system.signature(),
             () -> system.pivot("h0.0"),
             () -> sets.count(),
+            () -> sets.stream(),
             () -> sets.mostProbable(5, Probabilities.all(0.9)));
     for (Runnable question : questions) {
       Thread.currentThread().interrupt();
@@ -242,23 +270,32 @@ class BudgetTest {
     }
   }
 
-  @Test
-  void interrupt_fromAnotherThread() throws Exception {
-    Structure wide = grid(20, 20).connecting("0.0", "19.19");
+  /** Interrupts the work a while after it began; its outcome. */
+  private static BudgetExceededException interrupted(Callable<?> work) throws Exception {
     CountDownLatch begun = new CountDownLatch(1);
-    FutureTask<CoherentSystem> task =
+    FutureTask<Object> task =
         new FutureTask<>(
             () -> {
               begun.countDown();
-              return wide.compile();
+              return work.call();
             });
     Thread thread = new Thread(task);
+    thread.setDaemon(true);
     thread.start();
     begun.await();
+    Thread.sleep(100);
     thread.interrupt();
     ExecutionException ended =
-        assertThrows(ExecutionException.class, () -> task.get(60, TimeUnit.SECONDS));
-    assertEquals(INTERRUPT, ((BudgetExceededException) ended.getCause()).limit());
+        assertThrows(ExecutionException.class, () -> task.get(20, TimeUnit.SECONDS));
+    return (BudgetExceededException) ended.getCause();
+  }
+
+  @Test
+  void interrupt_fromAnotherThread() throws Exception {
+    Structure wide = grid(20, 20).connecting("0.0", "19.19");
+    assertEquals(INTERRUPT, interrupted(wide::compile).limit());
+    Structure grid = grid(9, 9).connecting("0.0", "8.8");
+    assertEquals(INTERRUPT, interrupted(() -> Derivation.of(grid)).limit());
   }
 
   /** Every node must work and none is done with before the last is met. */

@@ -93,6 +93,12 @@ class StructureSyntaxTest {
         arguments("network(perfectLink(x y))", 1, 23, "a comma"),
         arguments("network(perfectArc(x, y, z))", 1, 24, "a closing parenthesis"),
         arguments("network(node(x), connectingAll())", 1, 15, "a comma"),
+        arguments(
+            "network(node(x, a),\n node(x, b), link(l, x, y), connecting(x, y))",
+            2,
+            7,
+            "a node that is described once (this one already depends on a; a node that needs both"
+                + " takes series of the two)"),
         arguments("network(link(a, x, y), connecting x)", 1, 35, "an opening parenthesis"),
         arguments("network(link(a, x, y), connecting())", 1, 35, "a node's name"),
         arguments("network(link(a, x, y), connecting(x y))", 1, 37, MORE),

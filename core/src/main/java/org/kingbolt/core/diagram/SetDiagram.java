@@ -105,11 +105,13 @@ public final class SetDiagram {
   /**
    * Walks over the family in order of size and, within a size, in order of levels.
    *
+   * @param meter hears of every step
    * @return a fresh walk; nothing is listed in advance. Cost: one scan to begin with, then at most
-   *     one step a level for each set.
+   *     one step a level for each set; 12 bytes a node, and where sizes are missing between others,
+   *     up to 8 bytes a node and one more scan for every 64 sizes.
    */
-  public SetWalk walk() {
-    return new SizeWalk(nodes);
+  public SetWalk walk(WorkMeter meter) {
+    return new SizeWalk(nodes, meter);
   }
 
   /**
