@@ -49,4 +49,14 @@ public final class Bounds {
   public BoundsAtProbabilities given(Probabilities p) {
     return new BoundsAtProbabilities(system, Objects.requireNonNull(p, "probabilities are null"));
   }
+
+  /**
+   * Says what this is and what to call on it.
+   *
+   * @return one line
+   */
+  @Override
+  public String toString() {
+    return "Bounds[" + system + "]; call given(probabilities)";
+  }
 }

@@ -126,6 +126,14 @@ public final class Budget {
       }
     }
 
+    @Override
+    public void now(long held) {
+      if (held > budget.nodes) {
+        throw BudgetExceededException.nodes(work, budget.nodes, held);
+      }
+      poll(held);
+    }
+
     private void poll(long held) {
       if (Thread.currentThread().isInterrupted()) {
         throw BudgetExceededException.interrupted(work, held);

@@ -30,7 +30,9 @@ final class CapacityStructure extends Structure {
     List<Long> values = new ArrayList<>();
     for (Map.Entry<String, Long> entry : capacities.entrySet()) {
       parts.add(component(Check.name(entry.getKey(), KIND)));
-      values.add(Check.notNull(entry.getValue(), KIND + ": capacity of " + entry.getKey()));
+      values.add(
+          Check.notNull(
+              entry.getValue(), KIND + ": the capacity of " + Check.quoted(entry.getKey())));
     }
     return described(demand, parts, values);
   }
@@ -71,7 +73,8 @@ final class CapacityStructure extends Structure {
               + ": a demand of "
               + demand
               + " is never met; all capacities together are only "
-              + sum);
+              + sum
+              + ", so ask for less or add capacity");
     }
     return new CapacityStructure(demand, parts, List.copyOf(capacities));
   }

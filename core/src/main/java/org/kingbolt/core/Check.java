@@ -22,7 +22,8 @@ final class Check {
 
   /** A component's name: not null, not blank. */
   static String name(String name, String where) {
-    Objects.requireNonNull(name, () -> where + ": a name is null; give every component a name");
+    Objects.requireNonNull(
+        name, () -> where + ": a name is null; give one with at least one visible character");
     if (name.isBlank()) {
       throw new IllegalArgumentException(
           where + ": a name is " + quoted(name) + "; it must have at least one visible character");
@@ -31,7 +32,7 @@ final class Check {
   }
 
   static <T> T notNull(T value, String what) {
-    return Objects.requireNonNull(value, () -> what + " is null");
+    return Objects.requireNonNull(value, () -> what + " is null; it must be given");
   }
 
   /** The complaint about a name that the structure does not have. */
@@ -59,6 +60,11 @@ final class Check {
     return names.size() > SHOWN
         ? text + " and " + (names.size() - SHOWN) + " more"
         : text.isEmpty() ? "none" : text;
+  }
+
+  /** All names, quoted. */
+  static String listedInFull(Collection<String> names) {
+    return String.join(", ", names.stream().map(Check::quoted).toList());
   }
 
   static String quoted(String name) {

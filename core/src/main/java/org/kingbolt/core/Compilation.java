@@ -24,10 +24,10 @@ final class Compilation {
   /** The probability alone, without a diagram of the whole. */
   static Probability reliability(Structure structure, Probabilities p, Budget budget) {
     Numbering numbering = new Numbering(structure);
-    List<Probability> values =
-        Check.notNull(p, "probabilities").forComponents(numbering.components());
-    double[] working = values.stream().mapToDouble(Probability::working).toArray();
-    double[] failing = values.stream().mapToDouble(Probability::failing).toArray();
+    List<String> components = numbering.components();
+    double[] working = new double[components.size()];
+    double[] failing = new double[components.size()];
+    Check.notNull(p, "probabilities").fill(components, working, failing);
     WorkMeter meter =
         Check.notNull(budget, "budget").start("working out the reliability without a diagram");
     double[] both =

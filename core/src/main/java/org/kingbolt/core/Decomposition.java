@@ -2,6 +2,7 @@ package org.kingbolt.core;
 
 import java.util.ArrayDeque;
 import java.util.ArrayList;
+import java.util.Collections;
 import java.util.Deque;
 import java.util.HashMap;
 import java.util.HashSet;
@@ -65,11 +66,13 @@ final class Decomposition {
 
   private final Formula holder = Formula.of(Formula.Kind.PRODUCT);
   private final Deque<Pending> pending = new ArrayDeque<>();
+  private final Runnable pause;
   private int unresolved;
   private int symbols;
   private int depth;
 
-  private Decomposition(Structure structure) {
+  private Decomposition(Structure structure, Runnable pause) {
+    this.pause = pause;
     holder.operands.add(Formula.of(Formula.Kind.ONE));
     pending.push(new Pending(structure, holder, 0, 0, new Uses(structure)));
     while (!pending.isEmpty()) {
@@ -77,8 +80,13 @@ final class Decomposition {
     }
   }
 
-  static Decomposition of(Structure structure) {
-    return new Decomposition(structure);
+  /**
+   * Takes a structure apart.
+   *
+   * @param pause called once in a while; may end the work by throwing
+   */
+  static Decomposition of(Structure structure, Runnable pause) {
+    return new Decomposition(structure, pause);
   }
 
   Formula formula() {
@@ -93,7 +101,7 @@ final class Decomposition {
     Structure structure = item.structure;
     Uses uses = item.uses;
     if (structure instanceof NetworkStructure network) {
-      structure = NetworkReduction.of(network);
+      structure = NetworkReduction.of(network, pause);
       uses = new Uses(structure);
     }
     depth = Math.max(depth, item.depth);
@@ -147,6 +155,7 @@ final class Decomposition {
   private static List<Structure> flattened(GateStructure gate, boolean series) {
     List<Structure> flat = new ArrayList<>();
     Set<Structure> seen = new HashSet<>();
+    Set<Structure> opened = Collections.newSetFromMap(new IdentityHashMap<>());
     Deque<Structure> open = new ArrayDeque<>();
     open.push(gate);
     while (!open.isEmpty()) {
@@ -154,12 +163,12 @@ final class Decomposition {
       boolean same =
           structure instanceof GateStructure inner
               && (series ? inner.isSeries() : inner.isParallel());
-      if (same) {
+      if (same && opened.add(structure)) {
         List<Structure> parts = structure.parts();
         for (int i = parts.size() - 1; i >= 0; i--) {
           open.push(parts.get(i));
         }
-      } else if (seen.add(structure)) {
+      } else if (!same && seen.add(structure)) {
         flat.add(structure);
       }
     }

@@ -53,10 +53,11 @@ public final class Derivation {
   private final Map<Structure, Step> byStructure = new HashMap<>();
 
   private Derivation(Structure structure, WorkMeter meter) {
+    Runnable pause = () -> meter.now(steps.size());
     stepFor(structure, List.of());
     for (int next = 0; next < steps.size(); next++) {
-      meter.at(steps.size());
-      derive(steps.get(next));
+      pause.run();
+      derive(steps.get(next), pause);
     }
   }
 
@@ -98,15 +99,17 @@ public final class Derivation {
     return step;
   }
 
-  private void derive(Step step) {
-    Formula formula = Decomposition.of(step.structure).formula();
+  private void derive(Step step, Runnable pause) {
+    Formula formula = Decomposition.of(step.structure, pause).formula();
     if (formula.kind == Formula.Kind.RESULT) {
       Structure knot = Objects.requireNonNull(formula.structure);
-      KeyChoice choice = KeyChoice.best(knot);
+      KeyChoice choice = KeyChoice.best(knot, pause);
       step.key = choice.key;
       formula =
           Formula.pivot(
-              Decomposition.of(choice.key).formula(), side(choice.working), side(choice.failed));
+              Decomposition.of(choice.key, pause).formula(),
+              side(choice.working, pause),
+              side(choice.failed, pause));
     }
     for (Formula node : formula.postOrder()) {
       Structure open = node.structure;
@@ -118,9 +121,11 @@ public final class Derivation {
   }
 
   /** What is left on one side of a pivot, taken apart as far as reductions of networks go. */
-  private static Formula side(Structure structure) {
+  private static Formula side(Structure structure, Runnable pause) {
     Structure reduced =
-        structure instanceof NetworkStructure network ? NetworkReduction.of(network) : structure;
+        structure instanceof NetworkStructure network
+            ? NetworkReduction.of(network, pause)
+            : structure;
     return reduced instanceof ConstantStructure
         ? Formula.of(reduced.isAlwaysWorking() ? Formula.Kind.ONE : Formula.Kind.ZERO)
         : Formula.result(reduced);

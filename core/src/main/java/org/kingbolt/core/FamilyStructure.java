@@ -34,11 +34,11 @@ final class FamilyStructure extends Structure {
 
   static Structure described(boolean paths, Collection<? extends Collection<String>> sets) {
     String kind = paths ? PATHS : CUTS;
-    Check.notNull(sets, kind + ": the sets");
+    Check.notNull(sets, kind + ": the collection of sets");
     List<List<Structure>> structures = new ArrayList<>();
     for (Collection<String> set : sets) {
       List<Structure> members = new ArrayList<>();
-      for (String name : Check.notNull(set, kind + ": a set")) {
+      for (String name : Check.notNull(set, kind + ": set " + (structures.size() + 1))) {
         members.add(component(Check.name(name, kind)));
       }
       structures.add(members);

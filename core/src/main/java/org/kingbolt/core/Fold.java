@@ -80,28 +80,67 @@ final class Fold {
     return names;
   }
 
-  /** Equality of text, without making the text; one object is equal to itself at once. */
+  /**
+   * Equality of text, without making the text; one object is equal to itself at once, and two
+   * objects are compared only where it does not follow from earlier comparisons that they must be
+   * equal. Cost: linear in the number of distinct sub-structures and their parts.
+   */
   @SuppressWarnings("ReferenceEquality")
   static boolean equal(Structure left, Structure right) {
     record Pair(Structure left, Structure right) {}
+    if (left == right) {
+      return true;
+    }
+    if (!alike(left, right) || left.parts().isEmpty()) {
+      return alike(left, right);
+    }
+    IdentityHashMap<Structure, Structure> equalTo = new IdentityHashMap<>();
     Deque<Pair> open = new ArrayDeque<>();
     open.push(new Pair(left, right));
     while (!open.isEmpty()) {
       Pair pair = open.pop();
-      if (pair.left == pair.right) {
+      Structure oneLeft = representative(equalTo, pair.left);
+      Structure oneRight = representative(equalTo, pair.right);
+      if (oneLeft == oneRight) {
         continue;
       }
-      List<Structure> leftParts = pair.left.parts();
-      List<Structure> rightParts = pair.right.parts();
-      if (pair.left.hashCode() != pair.right.hashCode()
-          || leftParts.size() != rightParts.size()
-          || !pair.left.sameOperator(pair.right)) {
-        return false;
-      }
-      for (int i = 0; i < leftParts.size(); i++) {
-        open.push(new Pair(leftParts.get(i), rightParts.get(i)));
+      equalTo.put(oneRight, oneLeft);
+      for (int i = 0; i < oneLeft.parts().size(); i++) {
+        Structure leftPart = oneLeft.parts().get(i);
+        Structure rightPart = oneRight.parts().get(i);
+        if (leftPart != rightPart) {
+          if (!alike(leftPart, rightPart)) {
+            return false;
+          }
+          if (!leftPart.parts().isEmpty()) {
+            open.push(new Pair(leftPart, rightPart));
+          }
+        }
       }
     }
     return true;
+  }
+
+  /** Whether two structures are equal if their parts are. */
+  private static boolean alike(Structure left, Structure right) {
+    return left.hashCode() == right.hashCode()
+        && left.parts().size() == right.parts().size()
+        && left.sameOperator(right);
+  }
+
+  /** The one that stands for all structures that must be equal to a structure. */
+  private static Structure representative(
+      IdentityHashMap<Structure, Structure> equalTo, Structure structure) {
+    Structure at = structure;
+    Structure next = equalTo.get(at);
+    while (next != null) {
+      Structure afterNext = equalTo.get(next);
+      if (afterNext != null) {
+        equalTo.put(at, afterNext);
+      }
+      at = next;
+      next = afterNext;
+    }
+    return at;
   }
 }

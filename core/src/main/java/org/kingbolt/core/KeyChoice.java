@@ -23,19 +23,25 @@ final class KeyChoice {
   final Structure failed;
   private final List<Decomposition.Measure> sides;
 
-  private KeyChoice(Structure key, Structure working, Structure failed) {
+  private KeyChoice(Structure key, Structure working, Structure failed, Runnable pause) {
     this.key = key;
     this.working = working;
     this.failed = failed;
-    this.sides = List.of(Decomposition.of(working).measure(), Decomposition.of(failed).measure());
+    this.sides =
+        List.of(
+            Decomposition.of(working, pause).measure(), Decomposition.of(failed, pause).measure());
   }
 
   private int sum(java.util.function.ToIntFunction<Decomposition.Measure> field) {
     return sides.stream().mapToInt(field).sum();
   }
 
-  /** The best key of a structure that is neither a component nor independent series or parallel. */
-  static KeyChoice best(Structure structure) {
+  /**
+   * The best key of a structure that is neither a component nor independent series or parallel.
+   *
+   * @param pause called at least once a candidate; may end the work by throwing
+   */
+  static KeyChoice best(Structure structure, Runnable pause) {
     Set<String> repeated = Decomposition.repeated(structure);
     List<KeyChoice> tried = new ArrayList<>();
     if (repeated.isEmpty()) {
@@ -44,18 +50,21 @@ final class KeyChoice {
       int most = alike ? 1 : MOST_TRIED;
       int stride = (parts.size() + most - 1) / most;
       for (int i = 0; i < parts.size(); i += stride) {
-        tried.add(onPart(structure, i));
+        pause.run();
+        tried.add(onPart(structure, i, pause));
       }
     } else {
       List<String> names = List.copyOf(repeated);
       int stride = (names.size() + MOST_TRIED - 1) / MOST_TRIED;
       for (int i = 0; i < names.size(); i += stride) {
         String name = names.get(i);
+        pause.run();
         tried.add(
             new KeyChoice(
                 Structure.component(name),
                 structure.givenWorking(name),
-                structure.givenFailed(name)));
+                structure.givenFailed(name),
+                pause));
       }
     }
     Comparator<KeyChoice> order =
@@ -66,11 +75,12 @@ final class KeyChoice {
     return best.orElseThrow(() -> new AssertionError("no key for " + structure));
   }
 
-  private static KeyChoice onPart(Structure structure, int part) {
+  private static KeyChoice onPart(Structure structure, int part, Runnable pause) {
     return new KeyChoice(
         structure.parts().get(part),
         holding(structure, part, ConstantStructure.ALWAYS),
-        holding(structure, part, ConstantStructure.NEVER));
+        holding(structure, part, ConstantStructure.NEVER),
+        pause);
   }
 
   private static Structure holding(Structure structure, int part, Structure constant) {

@@ -6,6 +6,7 @@ import java.util.LinkedHashMap;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.Set;
 import org.kingbolt.core.NetworkStructure.Link;
 import org.kingbolt.core.NetworkStructure.Question;
@@ -55,7 +56,7 @@ public final class NetworkBuilder {
    *     has no components
    */
   public NetworkBuilder link(Structure part, String a, String b) {
-    return add(requirePart(part, a, b), new Link(a, b, false, false));
+    return add(requirePart("link", part, a, b), new Link(a, b, false, false));
   }
 
   /**
@@ -82,7 +83,7 @@ public final class NetworkBuilder {
    *     has no components
    */
   public NetworkBuilder arc(Structure part, String from, String to) {
-    return add(requirePart(part, from, to), new Link(from, to, true, false));
+    return add(requirePart("arc", part, from, to), new Link(from, to, true, false));
   }
 
   /**
@@ -133,7 +134,8 @@ public final class NetworkBuilder {
    */
   public NetworkBuilder node(String node, Structure part) {
     Check.name(node, "network node");
-    GateStructure.requireComponents("node " + Check.quoted(node), Check.notNull(part, "part"));
+    String where = "node " + Check.quoted(node);
+    GateStructure.requireComponents(where, Check.notNull(part, where + ": the part"));
     Structure before = nodeParts.get(node);
     if (before != null) {
       throw new IllegalStateException(
@@ -155,7 +157,7 @@ public final class NetworkBuilder {
    * @param terminals at least two different nodes of this network
    * @return the structure that works while they are connected, the terminals themselves working
    * @throws IllegalArgumentException if there are fewer than two names, or one is unknown or
-   *     repeated
+   *     repeated, or no link touches a node that can fail
    * @throws NotCoherentException if they are not connected even when everything works, or always
    *     are
    */
@@ -198,12 +200,19 @@ public final class NetworkBuilder {
     requireTerminals("reachingAllFrom", 1, source);
     if (nodes.size() < 2) {
       throw new IllegalArgumentException(
-          "reachingAllFrom: the network has no node besides " + Check.quoted(source));
+          "reachingAllFrom: the network has no node besides "
+              + Check.quoted(source)
+              + "; add a link or an arc to another");
     }
     Set<String> order = new LinkedHashSet<>();
     order.add(source);
     order.addAll(nodesInText());
     return structure(Question.ALL_FROM, List.copyOf(order));
+  }
+
+  /** What a node depends on by now, shortened for a message; nothing while it always works. */
+  Optional<String> dependence(String node) {
+    return Optional.ofNullable(nodeParts.get(node)).map(TextWriter::excerpt);
   }
 
   /** The nodes in order of their first mention in the text form: links, then failing nodes. */
@@ -236,8 +245,9 @@ public final class NetworkBuilder {
     return this;
   }
 
-  private static Structure requirePart(Structure part, String from, String to) {
-    GateStructure.requireComponents("link from " + from + " to " + to, Check.notNull(part, "part"));
+  private static Structure requirePart(String kind, Structure part, String from, String to) {
+    String where = kind + " from " + Check.quoted(from) + " to " + Check.quoted(to);
+    GateStructure.requireComponents(where, Check.notNull(part, where + ": the part"));
     return part;
   }
 
@@ -272,7 +282,29 @@ public final class NetworkBuilder {
     return List.copyOf(distinct);
   }
 
+  /** A node that can fail but that no link touches is a slip of the pen. */
+  private void requireLinksAtFailingNodes() {
+    Set<String> linked = new LinkedHashSet<>();
+    for (Link link : links) {
+      linked.add(link.from());
+      linked.add(link.to());
+    }
+    for (String node : nodeParts.keySet()) {
+      if (!linked.contains(node)) {
+        throw new IllegalArgumentException(
+            "node "
+                + Check.quoted(node)
+                + " can fail but no link touches it; give it a link, or check its name: the linked"
+                + " nodes are "
+                + Check.listed(linked));
+      }
+    }
+  }
+
   private Structure structure(Question question, List<String> terminals) {
+    if (question == Question.CONNECTING) {
+      requireLinksAtFailingNodes();
+    }
     List<Structure> parts = new ArrayList<>(linkParts);
     parts.addAll(nodeParts.values());
     NetworkStructure network =
@@ -283,7 +315,8 @@ public final class NetworkBuilder {
       throw new NotCoherentException(
           "network: "
               + Check.listed(terminals)
-              + " are connected by links that cannot fail, so the structure always works");
+              + " are connected by links that cannot fail, so the structure always works; let some of"
+              + " them depend on a component");
     }
     Arrays.fill(states, true);
     if (!network.evaluate(states)) {

@@ -2,6 +2,7 @@ package org.kingbolt.core;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import org.jspecify.annotations.Nullable;
 import org.kingbolt.core.Lexer.Word;
 
@@ -61,7 +62,9 @@ final class NetworkCall extends ParserCall {
         }
         case "node" -> {
           pending = item.text();
+          Word node = lexer.peek();
           pendingNode = lexer.name("a node's name");
+          requireNew(node);
           lexer.mark(',', "a comma");
           return null;
         }
@@ -80,6 +83,16 @@ final class NetworkCall extends ParserCall {
         }
         default -> throw item.expected(ITEMS);
       }
+    }
+  }
+
+  private void requireNew(Word node) {
+    Optional<String> before = network.dependence(node.text());
+    if (before.isPresent()) {
+      throw node.expected(
+          "a node that is described once (this one already depends on "
+              + before.get()
+              + "; a node that needs both takes series of the two)");
     }
   }
 

@@ -25,15 +25,23 @@ final class NetworkReduction {
 
   private final Deque<NetworkSketch> open = new ArrayDeque<>();
 
-  private NetworkReduction() {}
+  private final Runnable pause;
 
-  /** An equal structure, in which networks are left only where no reduction applies. */
-  static Structure of(NetworkStructure network) {
+  private NetworkReduction(Runnable pause) {
+    this.pause = pause;
+  }
+
+  /**
+   * An equal structure, in which networks are left only where no reduction applies.
+   *
+   * @param pause called before every pass over the links; may end the work by throwing
+   */
+  static Structure of(NetworkStructure network, Runnable pause) {
     if (network.isDual()) {
       NetworkStructure primal = (NetworkStructure) network.dual();
-      return of(primal).dual();
+      return of(primal, pause).dual();
     }
-    NetworkReduction reduction = new NetworkReduction();
+    NetworkReduction reduction = new NetworkReduction(pause);
     reduction.open.push(new NetworkSketch(network, network.parts()));
     while (!reduction.open.isEmpty()) {
       reduction.reduce(reduction.open.pop());
@@ -44,6 +52,7 @@ final class NetworkReduction {
   private void reduce(NetworkSketch sketch) {
     boolean changed;
     do {
+      pause.run();
       changed =
           joinParallel(sketch)
               || takeTerminalParts(sketch)

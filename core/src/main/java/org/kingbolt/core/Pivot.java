@@ -1,5 +1,9 @@
 package org.kingbolt.core;
 
+import java.util.LinkedHashSet;
+import java.util.List;
+import java.util.Set;
+
 /**
  * A system seen from one key component: what is left of it when the component works, what is left
  * when it has failed, and the reliability as the mean of the two.
@@ -56,7 +60,7 @@ public final class Pivot {
    * @throws IllegalArgumentException if components have no probability; the message lists them
    */
   public Probability reliability(Probabilities p) {
-    Probability key = Check.notNull(p, "probabilities").get(component);
+    Probability key = key(p);
     Probability works = givenWorking.reliability(p);
     Probability failed = givenFailed.reliability(p);
     return Probability.computed(
@@ -72,7 +76,7 @@ public final class Pivot {
    * @throws IllegalArgumentException if components have no probability; the message lists them
    */
   public String equation(Probabilities p) {
-    Probability key = Check.notNull(p, "probabilities").get(component);
+    Probability key = key(p);
     return Probability.digits(key.working())
         + " * "
         + Probability.digits(givenWorking.reliability(p).working())
@@ -82,6 +86,15 @@ public final class Pivot {
         + Probability.digits(givenFailed.reliability(p).working())
         + " = "
         + Probability.digits(reliability(p).working());
+  }
+
+  /** The key component's probability; a complaint lists what either side misses, too. */
+  private Probability key(Probabilities p) {
+    Set<String> needed = new LinkedHashSet<>();
+    needed.add(component);
+    needed.addAll(givenWorking.components());
+    needed.addAll(givenFailed.components());
+    return Check.notNull(p, "probabilities").forComponents(List.copyOf(needed)).get(0);
   }
 
   /**

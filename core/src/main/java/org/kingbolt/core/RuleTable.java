@@ -73,7 +73,7 @@ final class RuleTable {
     int all = (1 << names.size()) - 1;
     if (works.isEmpty()) {
       throw new NotCoherentException(
-          KIND + ": the rule never works, not even when all components work");
+          KIND + ": the rule never works, not even when all components work; it must work then");
     }
     for (int state = works.nextSetBit(0); state >= 0; state = works.nextSetBit(state + 1)) {
       for (int failed = all & ~state; failed != 0; failed &= failed - 1) {
@@ -91,14 +91,16 @@ final class RuleTable {
     }
     if (works.get(0)) {
       throw new NotCoherentException(
-          KIND + ": the rule always works, even when all components have failed");
+          KIND
+              + ": the rule always works, even when all components have failed; it must fail then");
     }
   }
 
   private Structure structure() {
     Diagram diagram = Templates.truthTable(names.size(), works, WorkMeter.UNLIMITED);
     List<Set<String>> sets = new ArrayList<>();
-    SetWalk walk = MinimalSolutions.paths(diagram, WorkMeter.UNLIMITED).walk();
+    WorkMeter meter = WorkMeter.UNLIMITED;
+    SetWalk walk = MinimalSolutions.paths(diagram, meter).walk(meter);
     Set<String> mentioned = new HashSet<>();
     for (int[] set = walk.next(); set != null; set = walk.next()) {
       Set<String> path = new LinkedHashSet<>();

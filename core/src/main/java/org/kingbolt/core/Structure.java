@@ -105,6 +105,7 @@ public abstract sealed class Structure implements Serializable
    *     has no components
    */
   public static Structure series(List<Structure> parts) {
+    Check.notNull(parts, GateStructure.SERIES + ": the list of parts");
     return GateStructure.described(GateStructure.SERIES, parts.size(), parts);
   }
 
@@ -195,7 +196,8 @@ public abstract sealed class Structure implements Serializable
    * Works while all components of some set work.
    *
    * @param sets path sets, minimal or not; at least one, none empty
-   * @return the structure; components are ordered by first mention in the sets' own iteration order
+   * @return the structure; components are ordered by first mention in the sets' own iteration
+   *     order, which {@code Set.of} changes from run to run
    * @throws IllegalArgumentException if there are no sets, or a set is empty, or a name is blank
    */
   public static Structure ofPathSets(Collection<? extends Collection<String>> sets) {
@@ -206,7 +208,8 @@ public abstract sealed class Structure implements Serializable
    * Fails when all components of some set have failed.
    *
    * @param sets cut sets, minimal or not; at least one, none empty
-   * @return the structure; components are ordered by first mention in the sets' own iteration order
+   * @return the structure; components are ordered by first mention in the sets' own iteration
+   *     order, which {@code Set.of} changes from run to run
    * @throws IllegalArgumentException if there are no sets, or a set is empty, or a name is blank
    */
   public static Structure ofCutSets(Collection<? extends Collection<String>> sets) {
@@ -236,7 +239,9 @@ public abstract sealed class Structure implements Serializable
    * demand.
    *
    * @param demand from 1 to the sum of the capacities, in the same unit
-   * @param capacities the capacity of each component, 0 or more; their order is kept
+   * @param capacities the capacity of each component, 0 or more; their order is kept, so use a map
+   *     with an order of its own where the text or the diagram must come out the same in every run
+   *     ({@code Map.of} has none)
    * @return the structure
    * @throws IllegalArgumentException if a capacity is negative, or the demand is out of range, or
    *     there are no components, or a name is blank
@@ -255,7 +260,8 @@ public abstract sealed class Structure implements Serializable
    *     blank or listed twice
    */
   public static Structure withoutFailureRun(int k, List<String> names) {
-    return RunStructure.described(k, named(array(names), RunStructure.LINE), false);
+    return RunStructure.described(
+        k, named(array(names, RunStructure.LINE), RunStructure.LINE), false);
   }
 
   /**
@@ -281,7 +287,8 @@ public abstract sealed class Structure implements Serializable
    *     blank or listed twice
    */
   public static Structure withoutFailureRunAround(int k, List<String> names) {
-    return RunStructure.described(k, named(array(names), RunStructure.CIRCLE), true);
+    return RunStructure.described(
+        k, named(array(names, RunStructure.CIRCLE), RunStructure.CIRCLE), true);
   }
 
   /**
@@ -300,7 +307,8 @@ public abstract sealed class Structure implements Serializable
   /**
    * Reads a structure's text, such as {@code series(intake, parallel(pumpA, pumpB))}.
    *
-   * <p>The text names the methods of this class with their arguments. A component is its name; a
+   * <p>The text names the methods of this class with their arguments; members of sets and carriers
+   * of capacity may be structures there, as {@link #replace} makes them. A component is its name; a
    * name with anything but letters, digits, {@code _}, {@code -} and {@code .} stands in double
    * quotes, with {@code \"}, {@code \\}, {@code \n}, {@code \t} and {@code \\u0041} inside. Blank
    * space and line breaks may stand between words.
@@ -630,7 +638,7 @@ public abstract sealed class Structure implements Serializable
         .toList();
   }
 
-  private static String[] array(List<String> names) {
-    return Check.notNull(names, "the list of names").toArray(new String[0]);
+  private static String[] array(List<String> names, String where) {
+    return Check.notNull(names, where + ": the list of names").toArray(new String[0]);
   }
 }

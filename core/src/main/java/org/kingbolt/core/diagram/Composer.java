@@ -65,15 +65,16 @@ public final class Composer {
    * @param network the network over the slots
    * @param dual whether the dual of the network is meant
    * @param slotParts the expression in each slot
+   * @param meter hears of the search for an order to sweep it in
    * @return the expression's number
    */
-  public int network(NetworkProblem network, boolean dual, int[] slotParts) {
-    return new NetworkReducer(this, network, dual, slotParts).expression();
+  public int network(NetworkProblem network, boolean dual, int[] slotParts, WorkMeter meter) {
+    return new NetworkReducer(this, network, dual, slotParts, meter).expression();
   }
 
   /** Adds a network that no reduction takes apart. */
-  int sweep(NetworkProblem network, boolean dual, int[] slotParts) {
-    FrontierPlan plan = new FrontierPlan(network);
+  int sweep(NetworkProblem network, boolean dual, int[] slotParts, WorkMeter meter) {
+    FrontierPlan plan = new FrontierPlan(network, meter);
     widest = Math.max(widest, plan.width());
     StateRule rule = network.directed ? new DirectedRule(plan) : new UndirectedRule(plan);
     Operator operator = Operator.swept(rule);
@@ -193,19 +194,23 @@ public final class Composer {
     System.arraycopy(arrangement, 0, pool, 0, pooled);
   }
 
-  /** The parts of a gate in increasing order of a key, and in their present one among equals. */
-  int[] sortedParts(int gate, IntUnaryOperator key) {
-    int[] parts = parts(gate);
-    long[] keyed = new long[parts.length];
-    for (int slot = 0; slot < parts.length; slot++) {
-      keyed[slot] = ((long) key.applyAsInt(parts[slot]) << 32) | slot;
+  /** The slots of an operator, their parts in increasing order of a key, equal ones as they are. */
+  int[] sortedSlots(int expression, IntUnaryOperator key) {
+    long[] keyed = new long[partCount[expression]];
+    for (int slot = 0; slot < keyed.length; slot++) {
+      keyed[slot] = ((long) key.applyAsInt(part(expression, slot)) << 32) | slot;
     }
     Arrays.sort(keyed);
-    int[] sorted = new int[parts.length];
-    for (int slot = 0; slot < parts.length; slot++) {
-      sorted[slot] = parts[(int) keyed[slot]];
+    return Arrays.stream(keyed).mapToInt(slot -> (int) slot).toArray();
+  }
+
+  /** The parts of an operator in increasing order of a key, equal ones as they are. */
+  int[] sortedParts(int expression, IntUnaryOperator key) {
+    int[] parts = sortedSlots(expression, key);
+    for (int i = 0; i < parts.length; i++) {
+      parts[i] = part(expression, parts[i]);
     }
-    return sorted;
+    return parts;
   }
 
   int count() {

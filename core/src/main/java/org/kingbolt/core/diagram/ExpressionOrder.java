@@ -44,7 +44,7 @@ final class ExpressionOrder {
     for (int variable : variables) {
       order.place(variable);
     }
-    order.sortGates();
+    order.sortParts();
     order.visit(root);
     order.measure();
     return order;
@@ -57,8 +57,8 @@ final class ExpressionOrder {
     }
   }
 
-  /** Puts the parts of each gate in order of the first variable they read. */
-  private void sortGates() {
+  /** Reads the parts of each gate and of each family in order of their first variables. */
+  private void sortParts() {
     int[] shallowest = new int[composer.count()];
     for (int expression = 0; expression < shallowest.length; expression++) {
       int least = Integer.MAX_VALUE;
@@ -66,6 +66,9 @@ final class ExpressionOrder {
         least = level[composer.variableOf(expression)];
       } else if (composer.operatorOf(expression) instanceof Threshold) {
         composer.arrange(expression, composer.sortedParts(expression, part -> shallowest[part]));
+      } else if (composer.operatorOf(expression) instanceof Family family) {
+        int[] slots = composer.sortedSlots(expression, part -> shallowest[part]);
+        composer.replace(expression, family.inOrder(slots), composer.parts(expression));
       }
       for (int l = composer.levels(expression) - 1; l >= 0; l--) {
         least = Math.min(least, shallowest[composer.partAt(expression, l)]);

@@ -4,29 +4,46 @@ import java.util.Arrays;
 
 /**
  * Chooses the order in which the frontier method meets the nodes of a network: a greedy sweep that
- * keeps the frontier narrow, tried from several starts; the cheapest by estimate is kept.
+ * keeps the frontier narrow, tried from several starts, and where the sweep promises to be costly a
+ * beam search; the cheapest by estimate is kept.
  *
- * <p>Deterministic. Cost: starts × nodes × frontier width × degree.
+ * <p>Deterministic. Cost: starts × nodes × frontier width × degree, and that of {@link
+ * FrontierBeam}.
  */
 final class FrontierOrder {
 
   private static final int STARTS = 32;
+
+  /** The beam is as wide as the likely cost of the sweep is worth. */
+  private static final int NARROWEST_BEAM = 12;
+
+  private static final int WIDEST_BEAM = 512;
+
+  /** No search is made for sweeps that promise to cost less. */
+  private static final double CHEAP = 1_000;
+
+  /** Nor for those that no search can mend. */
+  private static final double HOPELESS = 1e18;
+
+  private static final double STATES_A_STEP = 20;
 
   /** Assumed growth of the number of states with one more frontier node. */
   private static final double GROWTH = 2.2;
 
   private final NetworkProblem problem;
   private final int[][] linksAt;
+  private final WorkMeter meter;
   private double cost;
 
-  private FrontierOrder(NetworkProblem problem) {
+  private FrontierOrder(NetworkProblem problem, WorkMeter meter) {
     this.problem = problem;
+    this.meter = meter;
     this.linksAt = problem.linksAt();
   }
 
   /** The nodes connected with the source, in sweeping order. */
-  static int[] best(NetworkProblem problem) {
-    FrontierOrder search = new FrontierOrder(problem);
+  static int[] best(NetworkProblem problem, WorkMeter meter) {
+    FrontierOrder search = new FrontierOrder(problem, meter);
     int[] best = search.sweepFrom(problem.source);
     double bestCost = search.cost;
     int[] reached = best.clone();
@@ -39,7 +56,82 @@ final class FrontierOrder {
         best = order;
       }
     }
+    if (bestCost > CHEAP && bestCost < HOPELESS) {
+      double worth = bestCost / (STATES_A_STEP * reached.length);
+      int beam = (int) Math.max(NARROWEST_BEAM, Math.min(WIDEST_BEAM, worth));
+      int[] order = FrontierBeam.order(search.neighbours(), reached, beam, meter);
+      best = search.cheaper(best, order);
+      best = search.cheaper(best, backwards(best));
+    }
     return best;
+  }
+
+  private int[] cheaper(int[] order, int[] other) {
+    return costOf(other) < costOf(order) ? other : order;
+  }
+
+  private static int[] backwards(int[] order) {
+    int[] result = new int[order.length];
+    for (int i = 0; i < order.length; i++) {
+      result[i] = order[order.length - 1 - i];
+    }
+    return result;
+  }
+
+  /** The number of states that meeting some links is likely to cost. */
+  static double cost(int width, int links) {
+    return Math.pow(GROWTH, width) * links;
+  }
+
+  private int[][] neighbours() {
+    int[][] neighbours = new int[problem.nodes()][];
+    for (int node = 0; node < neighbours.length; node++) {
+      int here = node;
+      neighbours[node] =
+          Arrays.stream(linksAt[node])
+              .map(link -> problem.otherEnd(link, here))
+              .sorted()
+              .distinct()
+              .toArray();
+    }
+    return neighbours;
+  }
+
+  /** The estimated cost of a sweep in a given order. */
+  private double costOf(int[] order) {
+    boolean[] swept = new boolean[problem.nodes()];
+    int[] unswept = new int[problem.nodes()];
+    for (int node = 0; node < unswept.length; node++) {
+      unswept[node] = linksAt[node].length;
+    }
+    double sum = 0;
+    int width = 0;
+    int terminals = 0;
+    boolean pair = isPair();
+    for (int node : order) {
+      swept[node] = true;
+      int links = 0;
+      int leaving = 0;
+      for (int link : linksAt[node]) {
+        int other = problem.otherEnd(link, node);
+        unswept[other]--;
+        links += swept[other] ? 1 : 0;
+        leaving += swept[other] && unswept[other] == 0 ? 1 : 0;
+      }
+      terminals += problem.terminal(node) ? 1 : 0;
+      sum += cost(width + 1, links) * (pair ? Math.pow(width / 2 + 1, terminals) : 1);
+      width += (unswept[node] > 0 ? 1 : 0) - leaving;
+    }
+    return sum;
+  }
+
+  /** Whether there is one target only; the block of either terminal is then one of many. */
+  private boolean isPair() {
+    int targets = 0;
+    for (boolean isTarget : problem.target) {
+      targets += isTarget ? 1 : 0;
+    }
+    return targets == 1;
   }
 
   /** Greedy sweep; leaves its estimated cost in {@link #cost}. */
@@ -52,31 +144,25 @@ final class FrontierOrder {
     for (int node = 0; node < nodes; node++) {
       unplaced[node] = linksAt[node].length;
     }
-    cost = 0;
     int placed = 0;
-    int width = 0;
     int next = start;
     int oldest = 0;
     while (next >= 0) {
+      meter.at(nodes >> 3);
       position[next] = placed;
       order[placed++] = next;
       for (int link : linksAt[next]) {
         int other = problem.otherEnd(link, next);
         unplaced[other]--;
-        if (position[other] >= 0 && unplaced[other] == 0) {
-          width--;
-        }
       }
-      if (unplaced[next] > 0) {
-        width++;
-      }
-      cost += Math.pow(GROWTH, width) * linksAt[next].length;
       while (oldest < placed && unplaced[order[oldest]] == 0) {
         oldest++;
       }
       next = cheapestNeighbour(order, oldest, placed, position, unplaced);
     }
-    return Arrays.copyOf(order, placed);
+    int[] sweep = Arrays.copyOf(order, placed);
+    cost = costOf(sweep);
+    return sweep;
   }
 
   /** The unplaced neighbour that widens the frontier least; among equals, of the oldest node. */

@@ -7,8 +7,9 @@ import java.util.Deque;
 /**
  * Takes a network apart before it is swept: links in parallel and in series become one, dead ends
  * go, terminals that hang on one link pass their question on, links that cannot fail are
- * contracted, and where single nodes cut the network each biconnected piece becomes a question of
- * its own. Every step keeps the structure function, in terms of the original parts.
+ * contracted, where single nodes cut the network each biconnected piece becomes a question of its
+ * own, and a part that hangs on two nodes becomes one link. Every step keeps the structure
+ * function, in terms of the original parts.
  *
  * <p>Source: Moore &amp; Shannon 1956 for series and parallel; Satyanarayana &amp; Chang, Network
  * reliability and the factoring theorem, Networks 13 (1983) 107 for the others. Cost: nearly linear
@@ -18,6 +19,7 @@ final class NetworkReducer {
 
   private final Composer composer;
   private final boolean dual;
+  private final WorkMeter meter;
 
   /** What must work besides the networks that are left. */
   private int[] factors = new int[8];
@@ -30,9 +32,11 @@ final class NetworkReducer {
    *
    * @param parts the expression in each slot of the network
    */
-  NetworkReducer(Composer composer, NetworkProblem network, boolean dual, int[] parts) {
+  NetworkReducer(
+      Composer composer, NetworkProblem network, boolean dual, int[] parts, WorkMeter meter) {
     this.composer = composer;
     this.dual = dual;
+    this.meter = meter;
     NetworkGraph graph = new NetworkGraph(this, network.nodes(), network.source);
     for (int link = 0; link < network.links(); link++) {
       int slot = network.linkSlot[link];
@@ -47,6 +51,17 @@ final class NetworkReducer {
       }
       graph.wake(node);
     }
+    run(graph);
+  }
+
+  private NetworkReducer(Composer composer, boolean dual, NetworkGraph graph, WorkMeter meter) {
+    this.composer = composer;
+    this.dual = dual;
+    this.meter = meter;
+    run(graph);
+  }
+
+  private void run(NetworkGraph graph) {
     open.push(graph);
     while (!open.isEmpty()) {
       reduce(open.pop());
@@ -98,8 +113,17 @@ final class NetworkReducer {
         }
         return;
       }
+      if (NetworkModules.replace(graph, this)) {
+        open.push(graph);
+        return;
+      }
     }
     close(graph);
+  }
+
+  /** The expression of a part that stands between two nodes and holds no such part itself. */
+  int module(NetworkGraph part) {
+    return new NetworkReducer(composer, dual, part, meter).expression();
   }
 
   private void takeNode(NetworkGraph graph, int node) {
@@ -302,6 +326,6 @@ final class NetworkReducer {
     }
     NetworkProblem problem =
         new NetworkProblem(from, to, arc, linkSlot, nodeSlot, number[graph.source], target);
-    factor(composer.sweep(problem, dual, parts));
+    factor(composer.sweep(problem, dual, parts, meter));
   }
 }

@@ -1,6 +1,5 @@
 package org.kingbolt.core.diagram;
 
-import java.util.function.Function;
 import org.jspecify.annotations.Nullable;
 
 /**
@@ -59,11 +58,6 @@ public abstract class Operator {
     return new Fixed(template);
   }
 
-  /** An operator whose reduced template reads all slots in order. */
-  static Operator reduced(int slots, Function<WorkMeter, Diagram> maker) {
-    return new Made(slots, maker);
-  }
-
   /** An operator that decides slot by slot. */
   static Operator swept(StateRule rule) {
     return new Swept(rule);
@@ -94,26 +88,6 @@ public abstract class Operator {
     @Override
     Diagram make(WorkMeter meter) {
       return fixed;
-    }
-  }
-
-  private static final class Made extends Operator {
-    private final int slots;
-    private final Function<WorkMeter, Diagram> maker;
-
-    Made(int slots, Function<WorkMeter, Diagram> maker) {
-      this.slots = slots;
-      this.maker = maker;
-    }
-
-    @Override
-    int levels() {
-      return slots;
-    }
-
-    @Override
-    Diagram make(WorkMeter meter) {
-      return maker.apply(meter);
     }
   }
 

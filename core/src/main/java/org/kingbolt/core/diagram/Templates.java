@@ -85,39 +85,10 @@ public final class Templates {
    * @param n the number of slots
    * @param sets none empty, at least one; sorted or not, minimal or not
    * @param paths whether the sets are path sets, or else cut sets
-   * @return an operator whose template is the reduced diagram, slots in increasing order. Cost: the
-   *     sets are joined pairwise, so that no set is touched more than a logarithmic number of
-   *     times; sizes depend on the family.
+   * @return an operator whose template is the reduced diagram, slots of common sets close together
    */
   public static Operator family(int n, List<BitSet> sets, boolean paths) {
-    return Operator.reduced(n, meter -> familyDiagram(n, sets, paths, meter));
-  }
-
-  private static Diagram familyDiagram(int n, List<BitSet> sets, boolean paths, WorkMeter meter) {
-    NodeTable table = new NodeTable(n, meter);
-    int[] made = new int[sets.size()];
-    for (int i = 0; i < made.length; i++) {
-      int id = paths ? Diagram.WORKS : Diagram.FAILS;
-      BitSet set = sets.get(i);
-      for (int slot = set.length() - 1;
-          slot >= 0;
-          slot = slot > 0 ? set.previousSetBit(slot - 1) : -1) {
-        id = paths ? table.node(slot, Diagram.FAILS, id) : table.node(slot, id, Diagram.WORKS);
-      }
-      made[i] = id;
-    }
-    for (int count = made.length; count > 1; count = (count + 1) >> 1) {
-      for (int i = 0; i < count >> 1; i++) {
-        made[i] =
-            paths
-                ? table.or(made[2 * i], made[2 * i + 1])
-                : table.and(made[2 * i], made[2 * i + 1]);
-      }
-      if ((count & 1) == 1) {
-        made[count >> 1] = made[count - 1];
-      }
-    }
-    return table.diagram(made[0], StateSweep.identity(n));
+    return new Family(n, sets, paths);
   }
 
   /**

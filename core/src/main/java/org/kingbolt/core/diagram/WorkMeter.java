@@ -20,6 +20,17 @@ public interface WorkMeter {
    */
   void at(long held);
 
+  /**
+   * Called about once for every piece of work that takes long by itself: what {@link #at} looks at
+   * once in a while, such as a clock, is looked at in this call.
+   *
+   * @param held as in {@link #at}
+   * @throws RuntimeException of the implementation's choice, to end the work
+   */
+  default void now(long held) {
+    at(held);
+  }
+
   /** The memory that one counted node stands for, in bytes, tables and growth included. */
   int BYTES_PER_NODE = 96;
 }

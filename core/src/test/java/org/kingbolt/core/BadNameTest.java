@@ -1,0 +1,212 @@
+package org.kingbolt.core;
+
+import static org.kingbolt.core.BadCall.illegal;
+import static org.kingbolt.core.BadCall.isNull;
+
+import java.util.Arrays;
+import java.util.Collections;
+import java.util.List;
+import java.util.Map;
+import java.util.Set;
+import java.util.function.Consumer;
+import java.util.stream.Stream;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.MethodSource;
+
+/** Names that are null, blank, unknown, missing or repeated, wherever a name is taken. */
+class BadNameTest {
+
+  private static final String VISIBLE = "at least one visible character";
+  private static final Structure AB = Structure.series("a", "b");
+  private static final Probability HALF = Probability.working(0.5);
+
+  private record NameTaker(String where, Consumer<String> call) {}
+
+  private static NetworkBuilder line() {
+    return Structure.network().link("L1", "x", "y").link("L2", "y", "z");
+  }
+
+  private static List<String> with(String name) {
+    return Arrays.asList("a", name);
+  }
+
+  private static Stream<NameTaker> nameTakers() {
+    return Stream.of(
+        new NameTaker("component", name -> Structure.component(name)),
+        new NameTaker("series", name -> Structure.series("a", name)),
+        new NameTaker("parallel", name -> Structure.parallel("a", name)),
+        new NameTaker("atLeast", name -> Structure.atLeast(1, "a", name)),
+        new NameTaker("ofPathSets", name -> Structure.ofPathSets(List.of(with(name)))),
+        new NameTaker("ofCutSets", name -> Structure.ofCutSets(List.of(with(name)))),
+        new NameTaker("ofRule", name -> Structure.ofRule(with(name), Set::isEmpty)),
+        new NameTaker(
+            "capacityAtLeast",
+            name -> Structure.capacityAtLeast(1, Collections.singletonMap(name, 1L))),
+        new NameTaker("withoutFailureRun", name -> Structure.withoutFailureRun(1, "a", name)),
+        new NameTaker("withoutFailureRun", name -> Structure.withoutFailureRun(1, with(name))),
+        new NameTaker(
+            "withoutFailureRunAround", name -> Structure.withoutFailureRunAround(1, "a", name)),
+        new NameTaker(
+            "withoutFailureRunAround", name -> Structure.withoutFailureRunAround(1, with(name))),
+        new NameTaker("component", name -> Structure.network().link(name, "x", "y")),
+        new NameTaker("network node", name -> Structure.network().link("L", name, "y")),
+        new NameTaker("network node", name -> Structure.network().link("L", "x", name)),
+        new NameTaker("component", name -> Structure.network().arc(name, "x", "y")),
+        new NameTaker("network node", name -> Structure.network().arc("L", name, "y")),
+        new NameTaker("network node", name -> Structure.network().arc("L", "x", name)),
+        new NameTaker("network node", name -> Structure.network().perfectLink(name, "y")),
+        new NameTaker("network node", name -> Structure.network().perfectLink("x", name)),
+        new NameTaker("network node", name -> Structure.network().perfectArc(name, "y")),
+        new NameTaker("network node", name -> Structure.network().perfectArc("x", name)),
+        new NameTaker("network node", name -> Structure.network().node(name, "a")),
+        new NameTaker("component", name -> Structure.network().node("x", name)),
+        new NameTaker("connecting", name -> line().connecting("x", name)),
+        new NameTaker("reachingAllFrom", name -> line().reachingAllFrom(name)),
+        new NameTaker("order of components", name -> AB.compile(with(name), Budget.ofHeap())),
+        new NameTaker("component", name -> AB.givenWorking(name)),
+        new NameTaker("component", name -> AB.givenFailed(name)),
+        new NameTaker("component", name -> AB.replace(name, Structure.component("c"))),
+        new NameTaker("component", name -> AB.compile().pivot(name)),
+        new NameTaker(
+            "probabilities", name -> Probabilities.of(Collections.singletonMap(name, HALF))),
+        new NameTaker(
+            "probabilities", name -> Probabilities.working(Collections.singletonMap(name, 0.5))),
+        new NameTaker(
+            "probabilities", name -> Probabilities.failing(Collections.singletonMap(name, 0.5))),
+        new NameTaker("probabilities", name -> Probabilities.all(0.5).with(name, 0.5)),
+        new NameTaker("probabilities", name -> Probabilities.all(0.5).with(name, HALF)));
+  }
+
+  static Stream<BadCall> nullNames() {
+    return nameTakers()
+        .map(taker -> isNull(taker.where, () -> taker.call.accept(null), taker.where, "null"));
+  }
+
+  @ParameterizedTest
+  @MethodSource
+  void nullNames(BadCall bad) {
+    bad.check();
+  }
+
+  static Stream<BadCall> blankNames() {
+    return Stream.of("", " ", " \t\n", "\u2003")
+        .flatMap(
+            name ->
+                nameTakers()
+                    .map(
+                        taker ->
+                            illegal(
+                                taker.where,
+                                () -> taker.call.accept(name),
+                                taker.where,
+                                "\"" + name + "\"",
+                                VISIBLE)));
+  }
+
+  @ParameterizedTest
+  @MethodSource
+  void blankNames(BadCall bad) {
+    bad.check();
+  }
+
+  static Stream<BadCall> unknownNames() {
+    Probabilities onlyA = Probabilities.of(Map.of("a", HALF));
+    String[] known = {"unknown component", "\"q\"", "the components are \"a\", \"b\""};
+    String[] nodes = {"\"q\"", "not a node", "the nodes are \"x\", \"y\", \"z\""};
+    return Stream.of(
+        illegal("works", () -> AB.works(Set.of("q")), known),
+        illegal("givenWorking", () -> AB.givenWorking("q"), known),
+        illegal("givenFailed", () -> AB.givenFailed("q"), known),
+        illegal("replace", () -> AB.replace("q", AB), known),
+        illegal("pivot", () -> AB.compile().pivot("q"), known),
+        illegal("order", () -> AB.compile(List.of("a", "b", "q"), Budget.ofHeap()), known),
+        illegal("connecting", () -> line().connecting("x", "q"), nodes),
+        illegal("reachingAllFrom", () -> line().reachingAllFrom("q"), nodes),
+        illegal("get", () -> onlyA.get("q"), "no probability for \"q\"", "Probabilities.with"),
+        illegal("get blank", () -> onlyA.get(""), "no probability for \"\""),
+        illegal("works blank", () -> AB.works(Set.of("")), "unknown component \"\""));
+  }
+
+  @ParameterizedTest
+  @MethodSource
+  void unknownNames(BadCall bad) {
+    bad.check();
+  }
+
+  static Stream<BadCall> almostKnownNames() {
+    return Stream.of(
+        illegal("case", () -> AB.givenFailed("A"), "\"A\"", "did you mean \"a\"?"),
+        illegal("blanks", () -> AB.works(Set.of(" b ")), "\" b \"", "did you mean \"b\"?"));
+  }
+
+  @ParameterizedTest
+  @MethodSource
+  void almostKnownNames(BadCall bad) {
+    bad.check();
+  }
+
+  static Stream<BadCall> repeatedNames() {
+    String[] part = {"part 3 repeats part 1, a", "second unit its own name"};
+    return Stream.of(
+        illegal("series", () -> Structure.series("a", "b", "a"), part),
+        illegal("parallel", () -> Structure.parallel("a", "b", "a"), part),
+        illegal("atLeast", () -> Structure.atLeast(2, "a", "b", "a"), part),
+        illegal("run", () -> Structure.withoutFailureRun(2, "a", "b", "a"), part),
+        illegal("around", () -> Structure.withoutFailureRunAround(2, "a", "b", "a"), part),
+        illegal("structures", () -> Structure.parallel(AB, AB), "part 2", "series(a, b)"),
+        illegal(
+            "ofRule",
+            () -> Structure.ofRule(List.of("a", "a"), Set::isEmpty),
+            "ofRule",
+            "\"a\" is listed twice",
+            "once"),
+        illegal(
+            "order",
+            () -> AB.compile(List.of("a", "b", "a"), Budget.ofHeap()),
+            "the order of components",
+            "\"a\" twice",
+            "once"),
+        illegal(
+            "connecting",
+            () -> line().connecting("x", "z", "x"),
+            "connecting",
+            "\"x\" is listed twice",
+            "once"));
+  }
+
+  @ParameterizedTest
+  @MethodSource
+  void repeatedNames(BadCall bad) {
+    bad.check();
+  }
+
+  static Stream<BadCall> missingNames() {
+    String[] names = new String[30];
+    Arrays.setAll(names, i -> "unit" + i);
+    String[] words = Arrays.stream(names).map(name -> "\"" + name + "\"").toArray(String[]::new);
+    words[7] = "set each with Probabilities.with, or all at once with Probabilities.all";
+    CoherentSystem system = Structure.series(names).compile();
+    Probabilities p = Probabilities.working(Map.of("unit7", 0.5, "other", 0.5));
+    return Stream.of(
+        illegal("reliability", () -> system.reliability(p), words),
+        illegal("evaluation", () -> system.evaluation(p), words),
+        illegal("pivot", () -> system.pivot("unit3").reliability(p), words),
+        illegal("equation", () -> system.pivot("unit3").equation(p), words),
+        illegal("derivation", () -> Derivation.of(system.structure()).reliability(p), words),
+        illegal("most probable", () -> system.minimalPathSets().mostProbable(1, p), words),
+        illegal("set", () -> system.minimalCutSets().probability(Set.of(names), p), words),
+        illegal("list", () -> p.forComponents(List.of(names)), words),
+        illegal(
+            "order",
+            () -> AB.compile(List.of("b"), Budget.ofHeap()),
+            "the order of components",
+            "leaves out \"a\"",
+            "every component once"));
+  }
+
+  @ParameterizedTest
+  @MethodSource
+  void missingNames(BadCall bad) {
+    bad.check();
+  }
+}

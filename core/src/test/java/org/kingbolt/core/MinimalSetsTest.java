@@ -1,0 +1,130 @@
+package org.kingbolt.core;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertThrows;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.util.ArrayList;
+import java.util.HashSet;
+import java.util.Iterator;
+import java.util.List;
+import java.util.Set;
+import java.util.function.IntUnaryOperator;
+import java.util.stream.IntStream;
+import org.junit.jupiter.api.Test;
+import org.junit.jupiter.params.ParameterizedTest;
+import org.junit.jupiter.params.provider.ValueSource;
+import org.kingbolt.core.diagram.MinimalSolutions;
+import org.kingbolt.core.diagram.SetDiagram;
+import org.kingbolt.core.diagram.SetWalk;
+import org.kingbolt.core.diagram.WorkMeter;
+
+/** Streams of minimal sets that are large, or many. */
+class MinimalSetsTest {
+
+  /** Level by level in series and in parallel with a series of so many new components. */
+  private static Structure ladder(int levels, IntUnaryOperator width) {
+    Structure whole = Structure.component("x");
+    for (int level = 1; level <= levels; level++) {
+      Structure module = Structure.series(module(level, width));
+      whole = level % 2 == 0 ? Structure.series(whole, module) : Structure.parallel(whole, module);
+    }
+    return whole;
+  }
+
+  private static String[] module(int level, IntUnaryOperator width) {
+    return IntStream.range(0, width.applyAsInt(level))
+        .mapToObj(i -> level + "." + i)
+        .toArray(String[]::new);
+  }
+
+  /** A parallel level adds a path; a series level lengthens all of them. */
+  private static Set<Set<String>> ladderPaths(int levels, IntUnaryOperator width) {
+    List<Set<String>> paths = new ArrayList<>();
+    paths.add(new HashSet<>(Set.of("x")));
+    for (int level = 1; level <= levels; level++) {
+      Set<String> module = Set.of(module(level, width));
+      if (level % 2 == 0) {
+        paths.forEach(path -> path.addAll(module));
+      } else {
+        paths.add(new HashSet<>(module));
+      }
+    }
+    return new HashSet<>(paths);
+  }
+
+  @ParameterizedTest
+  @ValueSource(ints = {1, 2, 3, 64, 65})
+  void sizesFarApart_areListedInOrder(int factor) {
+    IntUnaryOperator width = level -> factor * (1 + level * level % 5);
+    Set<Set<String>> expected = ladderPaths(60, width);
+    MinimalSets paths = ladder(60, width).compile().minimalPathSets();
+    List<Set<String>> listed = paths.stream().toList();
+    assertEquals(expected.size(), listed.size());
+    assertEquals(expected, new HashSet<>(listed));
+    List<Integer> sizes = listed.stream().map(Set::size).toList();
+    assertEquals(sizes.stream().sorted().toList(), sizes);
+  }
+
+  private static SetDiagram family(int levels, int width) {
+    CoherentSystem system = ladder(levels, level -> width).compile();
+    return MinimalSolutions.paths(system.diagram(), WorkMeter.UNLIMITED);
+  }
+
+  @Test
+  void sizesWithoutGaps_needLittleMemory() {
+    int levels = 10_000;
+    SetDiagram family = family(levels, 1);
+    long nodes = family.nodes().size() / 4;
+    SetWalk walk = family.walk(Budget.ofNodes(nodes).start("listing"));
+    int count = 0;
+    for (int[] set = walk.next(); set != null; set = walk.next()) {
+      count++;
+    }
+    assertEquals(levels / 2 + 1, count);
+  }
+
+  @Test
+  void sizesWithGaps_endAtTheBudget() {
+    SetDiagram family = family(10_000, 2);
+    long nodes = family.nodes().size() / 2;
+    SetWalk walk = family.walk(Budget.ofNodes(nodes).start("listing"));
+    BudgetExceededException stopped =
+        assertThrows(
+            BudgetExceededException.class,
+            () -> {
+              int last = 0;
+              for (int[] set = walk.next(); set != null; set = walk.next()) {
+                assertTrue(set.length >= last);
+                last = set.length;
+              }
+            });
+    assertEquals(BudgetExceededException.Limit.NODES, stopped.limit());
+    assertTrue(stopped.reached() > nodes, () -> "reached " + stopped.reached());
+  }
+
+  @Test
+  void interrupt_endsAStream() {
+    String[] names = IntStream.range(0, 24).mapToObj(i -> "u" + i).toArray(String[]::new);
+    Iterator<Set<String>> sets = Structure.atLeast(12, names).compile().minimalCutSets().iterator();
+    assertEquals(13, sets.next().size());
+    Thread.currentThread().interrupt();
+    boolean stillSet;
+    BudgetExceededException stopped;
+    try {
+      stopped =
+          assertThrows(
+              BudgetExceededException.class,
+              () -> {
+                while (sets.hasNext()) {
+                  sets.next();
+                }
+              });
+    } finally {
+      stillSet = Thread.interrupted();
+    }
+    assertEquals(BudgetExceededException.Limit.INTERRUPT, stopped.limit());
+    assertTrue(stillSet);
+    assertTrue(stopped.getMessage().contains("while listing minimal sets"), stopped.getMessage());
+  }
+}
