@@ -4,6 +4,7 @@ import com.google.common.collect.ImmutableList;
 import java.util.Arrays;
 import java.util.IdentityHashMap;
 import java.util.List;
+import org.kingbolt.core.diagram.WorkMeter;
 
 /**
  * The distinct sub-structures of a structure, numbered from 0, parts before wholes and the root
@@ -13,7 +14,6 @@ import java.util.List;
 final class Numbering {
 
   private Structure[] structures = new Structure[64];
-  private int[] hash = new int[64];
   private int count;
 
   /** Numbers of the parts of all structures; those of structure n end at {@code end[n]}. */
@@ -21,8 +21,8 @@ final class Numbering {
 
   private int[] end = new int[64];
 
-  /** Open-addressed by hash code: one more than a structure's number. */
-  private int[] index = new int[128];
+  /** Open-addressed: a structure's hash code in the upper half, one more than its number below. */
+  private long[] index = new long[128];
 
   /** Numbers of operators that are equal to another object met before. */
   private final IdentityHashMap<Structure, Integer> copies = new IdentityHashMap<>();
@@ -35,7 +35,11 @@ final class Numbering {
   private int[] found = new int[64];
   private int foundCount;
 
-  Numbering(Structure root) {
+  private final WorkMeter meter;
+
+  /** Walks over a structure; the meter hears of every distinct sub-structure. */
+  Numbering(Structure root, WorkMeter meter) {
+    this.meter = meter;
     arrive(root);
     while (depth > 0) {
       Structure operator = open[depth - 1];
@@ -79,10 +83,11 @@ final class Numbering {
   private void arrive(Structure structure) {
     boolean component = structure instanceof ComponentStructure;
     boolean alike = false;
-    int at = slot(structure.hashCode());
+    int hash = structure.hashCode();
+    int at = slot(hash);
     for (; index[at] != 0; at = (at + 1) & (index.length - 1)) {
-      int number = index[at] - 1;
-      if (hash[number] == structure.hashCode()) {
+      if ((int) (index[at] >>> 32) == hash) {
+        int number = (int) index[at] - 1;
         Structure known = structures[number];
         if (known == structure || (component && known.sameOperator(structure))) {
           found(number);
@@ -119,8 +124,8 @@ final class Numbering {
   private int numberOf(Structure operator, int operands) {
     int at = slot(operator.hashCode());
     for (; index[at] != 0; at = (at + 1) & (index.length - 1)) {
-      int number = index[at] - 1;
-      if (hash[number] == operator.hashCode()
+      int number = (int) index[at] - 1;
+      if ((int) (index[at] >>> 32) == operator.hashCode()
           && hasParts(number, operands)
           && structures[number].sameOperator(operator)) {
         copies.put(operator, number);
@@ -136,10 +141,10 @@ final class Numbering {
   }
 
   private int add(Structure structure, int operands, int at) {
+    meter.at(count);
     int from = count == 0 ? 0 : end[count - 1];
     if (count == structures.length) {
       structures = Arrays.copyOf(structures, count << 1);
-      hash = Arrays.copyOf(hash, count << 1);
       end = Arrays.copyOf(end, count << 1);
     }
     if (parts.length - from < operands) {
@@ -147,9 +152,8 @@ final class Numbering {
     }
     System.arraycopy(found, foundCount, parts, from, operands);
     structures[count] = structure;
-    hash[count] = structure.hashCode();
     end[count] = from + operands;
-    index[at] = ++count;
+    index[at] = (long) structure.hashCode() << 32 | ++count;
     if (count << 1 > index.length) {
       growIndex();
     }
@@ -157,19 +161,21 @@ final class Numbering {
   }
 
   private void growIndex() {
-    index = new int[index.length << 1];
-    for (int number = 0; number < count; number++) {
-      int at = slot(hash[number]);
-      while (index[at] != 0) {
-        at = (at + 1) & (index.length - 1);
+    long[] smaller = index;
+    index = new long[smaller.length << 1];
+    for (long entry : smaller) {
+      if (entry != 0) {
+        int at = slot((int) (entry >>> 32));
+        while (index[at] != 0) {
+          at = (at + 1) & (index.length - 1);
+        }
+        index[at] = entry;
       }
-      index[at] = number + 1;
     }
   }
 
   /** Where the search for a hash code begins. */
-  private int slot(int hashCode) {
-    int mixed = hashCode * 0x9E3779B9;
-    return (mixed ^ (mixed >>> 16)) & (index.length - 1);
+  private int slot(int hash) {
+    return (hash * 0x9E3779B9) >>> (Integer.numberOfLeadingZeros(index.length) + 1);
   }
 }

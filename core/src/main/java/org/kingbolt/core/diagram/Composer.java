@@ -9,8 +9,8 @@ import java.util.function.IntUnaryOperator;
  * <p>Expressions are numbered in order of creation; an operator's parts must exist before it, and a
  * part may be used by several operators. Parts that share no variable are concatenated: the part is
  * built straight towards the nodes where its operator goes on, in time and memory linear in the
- * result. Where parts share variables, they are built on their own and joined by if-then-else,
- * inside the smallest operator that holds all uses.
+ * result. Where parts share variables, the smallest operator that holds all uses is built first,
+ * over the parts inside it that share nothing, and its diagram is concatenated like any other.
  *
  * <p>For one thread.
  */
@@ -244,8 +244,9 @@ public final class Composer {
   }
 
   /**
-   * Builds the diagram of an expression, with the variables in depth-first order of their first
-   * use.
+   * Builds the diagram of an expression, with the variables in depth-first order: where nothing is
+   * shared, of their first use, except that k-out-of-n gates read large parts first and last;
+   * elsewhere, in the best of several such orders. The expression is used up.
    *
    * @param root the expression
    * @param meter hears of every node
@@ -271,7 +272,7 @@ public final class Composer {
   }
 
   /**
-   * Builds the diagram of an expression, in the caller's order.
+   * Builds the diagram of an expression, in the caller's order. The expression is used up.
    *
    * @param root the expression
    * @param order all variables, each once
