@@ -66,6 +66,7 @@ class StructureSyntaxTest {
   static Stream<Arguments> faultsInNames() {
     return Stream.of(
         arguments("\"  \"", 1, 1, "a name with at least one visible character"),
+        arguments("series(a, \"\u200b\")", 1, 11, "a name with at least one visible character"),
         arguments("a\nb", 2, 1, "the end of the text"),
         arguments("\"open", 1, 6, "a closing double quote for the name that begins at line 1"),
         arguments("series(a,\n \"b\n\"", 3, 2, MORE),
