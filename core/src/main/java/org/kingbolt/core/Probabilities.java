@@ -149,7 +149,8 @@ public final class Probabilities implements Serializable {
    * @return true if it is listed, or if the register has a value for all others
    */
   public boolean covers(String component) {
-    return others != null || byName.containsKey(Check.notNull(component, "component"));
+    Check.notNull(component, "component");
+    return others != null || byName.containsKey(component);
   }
 
   /**
@@ -175,6 +176,7 @@ public final class Probabilities implements Serializable {
     List<Probability> found = new ArrayList<>(components.size());
     List<String> missing = new ArrayList<>();
     for (String component : components) {
+      Check.notNull(component, "a name in the list of components");
       Probability value = byName.getOrDefault(component, others);
       if (value == null) {
         missing.add(component);
