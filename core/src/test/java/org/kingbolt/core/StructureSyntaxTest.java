@@ -126,11 +126,19 @@ class StructureSyntaxTest {
   @Test
   void messageSaysWhatWasFound() {
     List<String> found =
-        Stream.of("series(a b)", "series(a", "series(a,)", "series(a; b)", "series(a \"b c\")")
+        Stream.of(
+                "series(a b)",
+                "series(a",
+                "series(a,)",
+                "series(a; b)",
+                "series(a \"b c\")",
+                "\"\\\ud83d\ude00\"")
             .map(text -> assertThrows(IllegalArgumentException.class, () -> Structure.parse(text)))
             .map(fault -> fault.getMessage().replaceFirst(".*, found ", ""))
             .toList();
-    assertEquals(List.of("\"b\"", "the end of the text", "')'", "';'", "\"b c\""), found);
+    assertEquals(
+        List.of("\"b\"", "the end of the text", "')'", "';'", "\"b c\"", "'\\\ud83d\ude00'"),
+        found);
   }
 
   static Stream<BadCall> refusedByTheMethodItNames() {
