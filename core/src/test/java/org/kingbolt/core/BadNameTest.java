@@ -178,6 +178,16 @@ class BadNameTest {
         illegal("around", () -> Structure.withoutFailureRunAround(2, "a", "b", "a"), part),
         illegal("structures", () -> Structure.parallel(AB, AB), "part 2", "series(a, b)"),
         illegal(
+            "paths",
+            () -> Structure.ofPathSets(List.of(List.of("a", "b"), List.of("b", "c", "b"))),
+            "ofPathSets: set 2 lists b twice",
+            "every member once"),
+        illegal(
+            "cuts",
+            () -> Structure.ofCutSets(List.of(List.of("a", "a"), List.of("b"))),
+            "ofCutSets: set 1 lists a twice",
+            "every member once"),
+        illegal(
             "ofRule",
             () -> Structure.ofRule(List.of("a", "a"), Set::isEmpty),
             "ofRule",
