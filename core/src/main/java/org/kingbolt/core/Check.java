@@ -3,6 +3,7 @@ package org.kingbolt.core;
 import java.util.Collection;
 import java.util.List;
 import java.util.Objects;
+import java.util.stream.Collectors;
 
 /** The argument checks of this package and their messages. */
 final class Check {
@@ -20,15 +21,51 @@ final class Check {
     return value + 0.0;
   }
 
-  /** A component's name: not null, not blank. */
+  /** A component's name: not null, something to see in it. */
   static String name(String name, String where) {
     Objects.requireNonNull(
         name, () -> where + ": a name is null; give one with at least one visible character");
-    if (name.isBlank()) {
+    if (isInvisible(name)) {
       throw new IllegalArgumentException(
-          where + ": a name is " + quoted(name) + "; it must have at least one visible character");
+          where
+              + ": a name is "
+              + quoted(name)
+              + codePoints(name)
+              + "; it must have at least one visible character");
     }
     return name;
+  }
+
+  /** Whether there is nothing to see in a name: blank space, controls, halves of pairs. */
+  static boolean isInvisible(String name) {
+    int at = 0;
+    while (at < name.length() && isInvisible(name.codePointAt(at))) {
+      at += Character.charCount(name.codePointAt(at));
+    }
+    return at == name.length();
+  }
+
+  private static boolean isInvisible(int codePoint) {
+    return Character.isWhitespace(codePoint)
+        || switch (Character.getType(codePoint)) {
+          case Character.SPACE_SEPARATOR,
+              Character.LINE_SEPARATOR,
+              Character.PARAGRAPH_SEPARATOR,
+              Character.CONTROL,
+              Character.FORMAT,
+              Character.SURROGATE,
+              Character.UNASSIGNED ->
+              true;
+          default -> false;
+        };
+  }
+
+  /** The first few characters of an invisible name by number, since its text says nothing. */
+  private static String codePoints(String name) {
+    return name.codePoints()
+        .limit(SHOWN)
+        .mapToObj(codePoint -> String.format("U+%04X", codePoint))
+        .collect(Collectors.joining(" ", name.isEmpty() ? "" : " (", name.isEmpty() ? "" : ")"));
   }
 
   static <T> T notNull(T value, String what) {

@@ -71,7 +71,17 @@ final class FamilyStructure extends Structure {
       for (Structure part : sets.get(i)) {
         GateStructure.requireComponents(kind + ": a member of set " + (i + 1), part);
         slots.putIfAbsent(part, slots.size());
-        set.set(slots.get(part));
+        int slot = slots.get(part);
+        if (set.get(slot)) {
+          throw new IllegalArgumentException(
+              kind
+                  + ": set "
+                  + (i + 1)
+                  + " lists "
+                  + TextWriter.excerpt(part)
+                  + " twice; list every member once");
+        }
+        set.set(slot);
       }
       distinct.add(set);
     }

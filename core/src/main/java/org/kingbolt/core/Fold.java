@@ -95,7 +95,7 @@ final class Fold {
     if (!alike(left, right) || left.parts().isEmpty()) {
       return alike(left, right);
     }
-    Map<Structure, Structure> equalTo = new IdentityHashMap<>();
+    IdentityHashMap<Structure, Structure> equalTo = new IdentityHashMap<>();
     Deque<Pair> open = new ArrayDeque<>();
     open.push(new Pair(left, right));
     while (!open.isEmpty()) {

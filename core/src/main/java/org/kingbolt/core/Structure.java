@@ -195,10 +195,11 @@ public abstract sealed class Structure implements Serializable
   /**
    * Works while all components of some set work.
    *
-   * @param sets path sets, minimal or not; at least one, none empty
+   * @param sets path sets, minimal or not; at least one, none empty, each with different names
    * @return the structure; components are ordered by first mention in the sets' own iteration
    *     order, which {@code Set.of} changes from run to run
-   * @throws IllegalArgumentException if there are no sets, or a set is empty, or a name is blank
+   * @throws IllegalArgumentException if there are no sets, or a set is empty, or a name is blank or
+   *     listed twice in one set
    */
   public static Structure ofPathSets(Collection<? extends Collection<String>> sets) {
     return FamilyStructure.described(true, sets);
@@ -207,10 +208,11 @@ public abstract sealed class Structure implements Serializable
   /**
    * Fails when all components of some set have failed.
    *
-   * @param sets cut sets, minimal or not; at least one, none empty
+   * @param sets cut sets, minimal or not; at least one, none empty, each with different names
    * @return the structure; components are ordered by first mention in the sets' own iteration
    *     order, which {@code Set.of} changes from run to run
-   * @throws IllegalArgumentException if there are no sets, or a set is empty, or a name is blank
+   * @throws IllegalArgumentException if there are no sets, or a set is empty, or a name is blank or
+   *     listed twice in one set
    */
   public static Structure ofCutSets(Collection<? extends Collection<String>> sets) {
     return FamilyStructure.described(false, sets);

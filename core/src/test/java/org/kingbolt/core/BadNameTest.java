@@ -89,7 +89,17 @@ class BadNameTest {
   }
 
   static Stream<BadCall> blankNames() {
-    return Stream.of("", " ", " \t\n", "\u2003")
+    return Stream.of(
+            "",
+            " ",
+            " \t\n",
+            "\u2003",
+            "\u00a0",
+            "\u200b",
+            "\u2060\ufeff",
+            "\u0007",
+            "\ud83d",
+            "\u00ad \u0378")
         .flatMap(
             name ->
                 nameTakers()
@@ -106,6 +116,19 @@ class BadNameTest {
   @ParameterizedTest
   @MethodSource
   void blankNames(BadCall bad) {
+    bad.check();
+  }
+
+  static Stream<BadCall> invisibleNames_areSpelledOut() {
+    return Stream.of(
+        illegal("space", () -> Structure.component("\u200b\u00a0"), "(U+200B U+00A0); it must"),
+        illegal("tag", () -> Structure.component("\udb40\udc01"), "(U+E0001); it must"),
+        illegal("nothing", () -> Structure.component(""), "a name is \"\"; it must"));
+  }
+
+  @ParameterizedTest
+  @MethodSource
+  void invisibleNames_areSpelledOut(BadCall bad) {
     bad.check();
   }
 
@@ -154,6 +177,16 @@ class BadNameTest {
         illegal("run", () -> Structure.withoutFailureRun(2, "a", "b", "a"), part),
         illegal("around", () -> Structure.withoutFailureRunAround(2, "a", "b", "a"), part),
         illegal("structures", () -> Structure.parallel(AB, AB), "part 2", "series(a, b)"),
+        illegal(
+            "paths",
+            () -> Structure.ofPathSets(List.of(List.of("a", "b"), List.of("b", "c", "b"))),
+            "ofPathSets: set 2 lists b twice",
+            "every member once"),
+        illegal(
+            "cuts",
+            () -> Structure.ofCutSets(List.of(List.of("a", "a"), List.of("b"))),
+            "ofCutSets: set 1 lists a twice",
+            "every member once"),
         illegal(
             "ofRule",
             () -> Structure.ofRule(List.of("a", "a"), Set::isEmpty),

@@ -103,6 +103,7 @@ class NullArgumentTest {
         isNull("most probable", () -> cuts.mostProbable(1, null), "probabilities"),
         isNull("set", () -> cuts.probability(null, Probabilities.all(0.5)), "set"),
         isNull("set", () -> cuts.probability(Set.of("a"), null), "probabilities"),
+        isNull("set member", () -> cuts.probability(nullMember, Probabilities.all(0.5)), "a name"),
         isNull("derivation", () -> Derivation.of(null), "structure"),
         isNull("derivation", () -> Derivation.of(AB, null), "budget"),
         isNull("derivation", () -> Derivation.of(AB).reliability(null), "probabilities"),
@@ -118,6 +119,7 @@ class NullArgumentTest {
 
   static Stream<BadCall> probabilities() {
     Map<String, Double> noNumber = Collections.singletonMap("a", null);
+    List<String> noName = Collections.singletonList(null);
     return Stream.of(
         isNull("all", () -> Probabilities.all(NO_PROBABILITY), "probability"),
         isNull("of", () -> Probabilities.of(null), "the map of probabilities"),
@@ -131,7 +133,11 @@ class NullArgumentTest {
         isNull("failing value", () -> Probabilities.failing(noNumber), "probability of \"a\""),
         isNull("with", () -> Probabilities.all(0.5).with("a", null), "probability of \"a\""),
         isNull("get", () -> Probabilities.all(0.5).get(null), "component"),
-        isNull("list", () -> Probabilities.all(0.5).forComponents(null), "list of components"));
+        isNull("covers", () -> Probabilities.all(0.5).covers(null), "component"),
+        isNull("covers", () -> Probabilities.of(Map.of()).covers(null), "component"),
+        isNull("list", () -> Probabilities.all(0.5).forComponents(null), "list of components"),
+        isNull("name", () -> Probabilities.all(0.5).forComponents(noName), "list of components"),
+        isNull("name", () -> Probabilities.of(Map.of()).forComponents(noName), "list of comp"));
   }
 
   @ParameterizedTest
