@@ -3,6 +3,7 @@ package org.kingbolt.core;
 import java.util.Collection;
 import java.util.List;
 import java.util.Objects;
+import java.util.function.Supplier;
 import java.util.stream.Collectors;
 
 /** The argument checks of this package and their messages. */
@@ -23,12 +24,22 @@ final class Check {
 
   /** A component's name: not null, something to see in it. */
   static String name(String name, String where) {
+    return name(name, () -> where + ": a name");
+  }
+
+  /** A component's name in a list, at a place from 1 up. */
+  static String name(String name, String where, int place) {
+    return name(name, () -> where + ": name " + place);
+  }
+
+  /** A component's name; a complaint begins with what it is the name of. */
+  static String name(String name, Supplier<String> what) {
     Objects.requireNonNull(
-        name, () -> where + ": a name is null; give one with at least one visible character");
+        name, () -> what.get() + " is null; give one with at least one visible character");
     if (isInvisible(name)) {
       throw new IllegalArgumentException(
-          where
-              + ": a name is "
+          what.get()
+              + " is "
               + quoted(name)
               + codePoints(name)
               + "; it must have at least one visible character");

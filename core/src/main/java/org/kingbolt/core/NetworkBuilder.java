@@ -254,7 +254,7 @@ public final class NetworkBuilder {
   private List<String> requireTerminals(String question, int fewest, String... terminals) {
     Set<String> distinct = new LinkedHashSet<>();
     for (String terminal : terminals) {
-      Check.name(terminal, question);
+      Check.name(terminal, question, distinct.size() + 1);
       if (!nodes.contains(terminal)) {
         throw new IllegalArgumentException(
             question

@@ -119,6 +119,41 @@ class BadNameTest {
     bad.check();
   }
 
+  private static Stream<NameTaker> listTakers() {
+    return Stream.of(
+        new NameTaker("series: name 2", name -> Structure.series("a", name)),
+        new NameTaker("parallel: name 1", name -> Structure.parallel(name, "a")),
+        new NameTaker("atLeast: name 3", name -> Structure.atLeast(1, "a", "b", name)),
+        new NameTaker(
+            "withoutFailureRun: name 2", name -> Structure.withoutFailureRun(1, "a", name)),
+        new NameTaker(
+            "withoutFailureRunAround: name 2",
+            name -> Structure.withoutFailureRunAround(1, with(name))),
+        new NameTaker(
+            "ofPathSets: set 2: name 2",
+            name -> Structure.ofPathSets(List.of(List.of("b"), with(name)))),
+        new NameTaker("ofCutSets: set 1: name 2", name -> Structure.ofCutSets(List.of(with(name)))),
+        new NameTaker("ofRule: name 2", name -> Structure.ofRule(with(name), Set::isEmpty)),
+        new NameTaker("connecting: name 2", name -> line().connecting("x", name)),
+        new NameTaker(
+            "the order of components: name 2", name -> AB.compile(with(name), Budget.ofHeap())));
+  }
+
+  static Stream<BadCall> placeInAList() {
+    return listTakers()
+        .flatMap(
+            taker ->
+                Stream.of(
+                    isNull(taker.where, () -> taker.call.accept(null), taker.where + " is null"),
+                    illegal(taker.where, () -> taker.call.accept(" "), taker.where + " is \" \"")));
+  }
+
+  @ParameterizedTest
+  @MethodSource
+  void placeInAList(BadCall bad) {
+    bad.check();
+  }
+
   static Stream<BadCall> invisibleNames_areSpelledOut() {
     return Stream.of(
         illegal("space", () -> Structure.component("\u200b\u00a0"), "(U+200B U+00A0); it must"),
