@@ -5,6 +5,7 @@ import java.util.List;
 import java.util.Objects;
 import java.util.function.Supplier;
 import java.util.stream.Collectors;
+import org.jspecify.annotations.Nullable;
 
 /** The argument checks of this package and their messages. */
 final class Check {
@@ -115,7 +116,7 @@ final class Check {
     return String.join(", ", names.stream().map(Check::quoted).toList());
   }
 
-  static String quoted(String name) {
-    return "\"" + name + "\"";
+  static String quoted(@Nullable String name) {
+    return name == null ? "null" : "\"" + name + "\"";
   }
 }
