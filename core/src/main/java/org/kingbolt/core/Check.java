@@ -89,17 +89,10 @@ final class Check {
     return new IllegalArgumentException(
         "unknown component "
             + quoted(name)
-            + nearest(name, known)
+            + Spelling.guess(name, known)
             + "; the components are "
-            + listed(known));
-  }
-
-  private static String nearest(String name, Collection<String> known) {
-    return known.stream()
-        .filter(candidate -> candidate.strip().equalsIgnoreCase(name.strip()))
-        .findFirst()
-        .map(candidate -> " (did you mean " + quoted(candidate) + "?)")
-        .orElse("");
+            + listed(known)
+            + (known.isEmpty() ? "" : "; name one of these"));
   }
 
   /** The first few names, quoted, and how many more there are. */

@@ -277,8 +277,11 @@ public final class NetworkBuilder {
             question
                 + ": "
                 + Check.quoted(terminal)
-                + " is not a node of the network; the nodes are "
-                + Check.listed(nodes));
+                + " is not a node of the network"
+                + Spelling.guess(terminal, nodes)
+                + "; the nodes are "
+                + Check.listed(nodes)
+                + (nodes.isEmpty() ? "; add a link first" : "; name one of these"));
       }
       if (!distinct.add(terminal)) {
         throw new IllegalArgumentException(

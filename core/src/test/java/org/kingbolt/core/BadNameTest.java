@@ -192,7 +192,25 @@ class BadNameTest {
   }
 
   static Stream<BadCall> almostKnownNames() {
+    Structure pumps = Structure.series("pump 1", "pump 2", "valve", "Intake filter", "bus");
+    NetworkBuilder yard = Structure.network().link("L", "north gate", "south gate");
+    String valve = "(did you mean \"valve\"?); the components are \"pump 1\"";
+    String filter = "(did you mean \"Intake filter\"?); the";
     return Stream.of(
+        illegal("left out", () -> pumps.givenFailed("vave"), valve, "; name one of these"),
+        illegal("added", () -> pumps.givenWorking("vallve"), valve),
+        illegal("changed", () -> pumps.works(Set.of("value")), valve),
+        illegal("swapped", () -> pumps.compile().pivot("vavle"), valve),
+        illegal("two slips", () -> pumps.givenFailed("intakefiltre"), filter),
+        illegal("nearest", () -> pumps.givenFailed("pump2"), "(did you mean \"pump 2\"?); the"),
+        illegal("too far", () -> pumps.givenFailed("vacuum"), "component \"vacuum\"; the"),
+        illegal("two of five", () -> pumps.givenFailed("halbe"), "component \"halbe\"; the"),
+        illegal("too short", () -> AB.givenFailed("c"), "component \"c\"; the components"),
+        illegal(
+            "node",
+            () -> yard.connecting("north gate", "suoth gate"),
+            "\"suoth gate\" is not a node of the network (did you mean \"south gate\"?); the nodes",
+            "; name one of these"),
         illegal("case", () -> AB.givenFailed("A"), "\"A\"", "did you mean \"a\"?"),
         illegal("blanks", () -> AB.works(Set.of(" b ")), "\" b \"", "did you mean \"b\"?"));
   }
