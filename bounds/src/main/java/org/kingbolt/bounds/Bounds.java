@@ -58,4 +58,14 @@ public final class Bounds {
             p,
             "probabilities are null; give those of all components, such as Probabilities.all(0.9)"));
   }
+
+  /**
+   * Says what this is and what to call on it.
+   *
+   * @return one line
+   */
+  @Override
+  public String toString() {
+    return "Bounds[" + system + "]; call given(probabilities)";
+  }
 }

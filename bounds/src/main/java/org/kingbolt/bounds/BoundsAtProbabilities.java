@@ -102,8 +102,8 @@ public final class BoundsAtProbabilities {
    */
   public Interval minMax(Budget budget) {
     requireBudget(budget);
-    SetProduct path = best(system.minimalPathSets(budget), true);
-    SetProduct cut = best(system.minimalCutSets(budget), false);
+    SetProduct path = best(system.minimalPathSets(budget), true, budget);
+    SetProduct cut = best(system.minimalCutSets(budget), false, budget);
     return new Interval(
         Rounding.down(path.any(), path.none(), path.operations() + slack()),
         Rounding.up(cut.none(), cut.any(), cut.operations() + slack()),
@@ -133,9 +133,9 @@ public final class BoundsAtProbabilities {
     return product;
   }
 
-  private SetProduct best(MinimalSets sets, boolean paths) {
+  private SetProduct best(MinimalSets sets, boolean paths, Budget budget) {
     SetProduct product = new SetProduct();
-    for (Set<String> set : sets.mostProbable(1, p)) {
+    for (Set<String> set : sets.mostProbable(1, p, budget)) {
       add(product, set, paths);
     }
     return product;
@@ -149,5 +149,15 @@ public final class BoundsAtProbabilities {
           paths ? value.working() : value.failing(), paths ? value.failing() : value.working());
     }
     product.end();
+  }
+
+  /**
+   * Says what this is and what to call on it.
+   *
+   * @return one line
+   */
+  @Override
+  public String toString() {
+    return "Bounds[" + system + "] at given probabilities; call esaryProschan() or minMax()";
   }
 }

@@ -79,18 +79,17 @@ public final class Interval {
   }
 
   /**
-   * Tells whether a probability lies between the ends, on both sides, ends included.
+   * Tells whether a probability lies between the ends, ends included.
    *
    * @param probability the value
-   * @return whether it does
+   * @return whether it does, judged on its smaller side, which has more digits
    */
   public boolean contains(Probability probability) {
     Objects.requireNonNull(
         probability, "probability is null; give one, such as Probability.failing(1e-6)");
-    return probability.working() >= lower.working()
-        && probability.working() <= upper.working()
-        && probability.failing() <= lower.failing()
-        && probability.failing() >= upper.failing();
+    return probability.failing() <= probability.working()
+        ? probability.failing() <= lower.failing() && probability.failing() >= upper.failing()
+        : probability.working() >= lower.working() && probability.working() <= upper.working();
   }
 
   /**

@@ -136,6 +136,21 @@ class BoundsTest {
     assertEquals(1.0, bounds.minMax().upper().working());
   }
 
+  /** Millions of sets: both sides of an end stay complements of each other. */
+  @Test
+  void ends_ofManySets_haveSidesThatAddUpToOne() {
+    String[] names = new String[22];
+    for (int i = 0; i < names.length; i++) {
+      names[i] = "c" + i;
+    }
+    BoundsAtProbabilities bounds =
+        Bounds.of(Structure.atLeast(11, names)).given(Probabilities.all(0.95));
+    for (Probability end :
+        List.of(bounds.esaryProschan().lower(), bounds.esaryProschan().upper())) {
+      assertEquals(1, end.working() + end.failing(), 1e-15);
+    }
+  }
+
   @Test
   void tooManySets_endInABudgetException() {
     String[] names = new String[30];

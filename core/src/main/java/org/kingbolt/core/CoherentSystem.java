@@ -86,7 +86,8 @@ public final class CoherentSystem implements Serializable {
    *
    * @param p the components' probabilities; components must fail independently
    * @return both sides, each to a relative error of a few units in the last place for every level
-   *     of the diagram. Cost: one scan.
+   *     of the diagram, as long as it is not below the range of a double, about 1e-308; what is
+   *     smaller comes out as 0. Cost: one scan.
    * @throws IllegalArgumentException if components have no probability; the message lists them
    */
   public Probability reliability(Probabilities p) {
@@ -113,10 +114,20 @@ public final class CoherentSystem implements Serializable {
    * @throws IllegalArgumentException if components have no probability; the message lists them
    */
   public Evaluation evaluation(Probabilities p) {
-    List<Probability> values = Check.notNull(p, "probabilities").forComponents(components);
-    double[] working = values.stream().mapToDouble(Probability::working).toArray();
-    double[] failing = values.stream().mapToDouble(Probability::failing).toArray();
+    double[] working = new double[components.size()];
+    double[] failing = new double[components.size()];
+    Check.notNull(p, "probabilities").fill(components, working, failing);
     return Evaluation.of(diagram, working, failing);
+  }
+
+  /**
+   * Makes an evaluator, to ask for the reliability many times over, in arrays.
+   *
+   * @return a fresh one, for one thread. Cost: memory, 16 bytes a node, and 12 more when it is
+   *     asked for derivatives and changes.
+   */
+  public Evaluator evaluator() {
+    return new Evaluator(this);
   }
 
   /**

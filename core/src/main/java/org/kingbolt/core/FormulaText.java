@@ -142,7 +142,9 @@ final class FormulaText {
   }
 
   private String symbol(String component) {
-    return latex ? "p_{\\mathrm{" + escaped(component) + "}}" : "p(" + component + ")";
+    return latex
+        ? "p_{\\mathrm{" + escaped(component) + "}}"
+        : "p(" + TextWriter.nameText(component) + ")";
   }
 
   private static String escaped(String name) {

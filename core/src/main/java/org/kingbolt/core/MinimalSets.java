@@ -3,6 +3,7 @@ package org.kingbolt.core;
 import java.math.BigInteger;
 import java.util.ArrayList;
 import java.util.Arrays;
+import java.util.Collections;
 import java.util.Iterator;
 import java.util.LinkedHashSet;
 import java.util.List;
@@ -16,6 +17,7 @@ import java.util.stream.StreamSupport;
 import org.jspecify.annotations.Nullable;
 import org.kingbolt.core.diagram.SetDiagram;
 import org.kingbolt.core.diagram.SetWalk;
+import org.kingbolt.core.diagram.WorkMeter;
 
 /**
  * All minimal path sets, or all minimal cut sets, of a system. They are held as a diagram, not as a
@@ -47,9 +49,10 @@ public final class MinimalSets implements Iterable<Set<String>> {
    * Counts the sets without listing them.
    *
    * @return the exact number
+   * @throws BudgetExceededException if the number of nodes is too large for the heap
    */
   public BigInteger count() {
-    return countBySize().stream().reduce(BigInteger.ZERO, BigInteger::add);
+    return family.count(Budget.ofHeap().start("counting minimal sets"));
   }
 
   /**
@@ -107,16 +110,30 @@ public final class MinimalSets implements Iterable<Set<String>> {
   }
 
   /**
+   * The most probable sets within {@link Budget#ofHeap()}.
+   *
+   * @param n how many, at least 0; fewer are returned when there are not so many
+   * @param p the components' probabilities
+   * @return the sets; see {@link #mostProbable(int, Probabilities, Budget)}
+   * @throws IllegalArgumentException if n is negative, or components have no probability
+   * @throws BudgetExceededException if the search grows too large for the heap
+   */
+  public List<Set<String>> mostProbable(int n, Probabilities p) {
+    return mostProbable(n, p, Budget.ofHeap());
+  }
+
+  /**
    * The most probable sets, best first, without listing the others: path sets by the probability
    * that all members work, cut sets by the probability that all members have failed.
    *
    * @param n how many, at least 0; fewer are returned when there are not so many
    * @param p the components' probabilities
-   * @return the sets; among equally probable ones the order is fixed but of no meaning
+   * @param budget how much work it may cost
+   * @return an unmodifiable list; among equally probable sets the order is fixed but of no meaning
    * @throws IllegalArgumentException if n is negative, or components have no probability
-   * @throws BudgetExceededException if the search grows too large for the heap
+   * @throws BudgetExceededException if the budget is used up
    */
-  public List<Set<String>> mostProbable(int n, Probabilities p) {
+  public List<Set<String>> mostProbable(int n, Probabilities p, Budget budget) {
     if (n < 0) {
       throw new IllegalArgumentException("asked for " + n + " sets; ask for 0 or more");
     }
@@ -124,8 +141,8 @@ public final class MinimalSets implements Iterable<Set<String>> {
         Check.notNull(p, "probabilities").forComponents(components).stream()
             .mapToDouble(value -> Math.log(side(value)))
             .toArray();
-    SetWalk walk =
-        family.walkByWeight(logs, Budget.ofHeap().start("searching the most probable sets"));
+    WorkMeter meter = Check.notNull(budget, "budget").start("searching the most probable sets");
+    SetWalk walk = family.walkByWeight(logs, meter);
     List<Set<String>> found = new ArrayList<>();
     while (found.size() < n) {
       int[] set = walk.next();
@@ -134,7 +151,7 @@ public final class MinimalSets implements Iterable<Set<String>> {
       }
       found.add(named(set));
     }
-    return found;
+    return Collections.unmodifiableList(found);
   }
 
   /**
@@ -167,7 +184,7 @@ public final class MinimalSets implements Iterable<Set<String>> {
     for (int index : sorted) {
       names.add(components.get(index));
     }
-    return java.util.Collections.unmodifiableSet(names);
+    return Collections.unmodifiableSet(names);
   }
 
   /**

@@ -160,7 +160,7 @@ public final class NetworkBuilder {
    * @param terminals at least two different nodes of this network
    * @return the structure that works while they are connected, the terminals themselves working
    * @throws IllegalArgumentException if there are fewer than two names, or one is unknown or
-   *     repeated
+   *     repeated, or no link touches a node that can fail
    * @throws NotCoherentException if they are not connected even when everything works, or always
    *     are
    */
@@ -302,7 +302,29 @@ public final class NetworkBuilder {
     return List.copyOf(distinct);
   }
 
+  /** A node that can fail but that no link touches is a slip of the pen. */
+  private void requireLinksAtFailingNodes() {
+    Set<String> linked = new LinkedHashSet<>();
+    for (Link link : links) {
+      linked.add(link.from());
+      linked.add(link.to());
+    }
+    for (String node : nodeParts.keySet()) {
+      if (!linked.contains(node)) {
+        throw new IllegalArgumentException(
+            "node "
+                + Check.quoted(node)
+                + " can fail but no link touches it; give it a link, or check its name: the linked"
+                + " nodes are "
+                + Check.listed(linked));
+      }
+    }
+  }
+
   private Structure structure(Question question, List<String> terminals) {
+    if (question == Question.CONNECTING) {
+      requireLinksAtFailingNodes();
+    }
     List<Structure> parts = new ArrayList<>(linkParts);
     parts.addAll(nodeParts.values());
     NetworkStructure network =

@@ -174,7 +174,7 @@ final class NetworkStructure extends Structure {
 
   @Override
   int express(Composer composer, int[] partExpressions, WorkMeter meter) {
-    return composer.network(problem, dual, partExpressions);
+    return composer.network(problem, dual, partExpressions, meter);
   }
 
   @Override

@@ -3,9 +3,12 @@ package org.kingbolt.core;
 import com.google.common.collect.ImmutableMap;
 import java.io.Serializable;
 import java.util.ArrayList;
+import java.util.Arrays;
+import java.util.Iterator;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.function.Consumer;
 import java.util.function.Function;
 import org.jspecify.annotations.Nullable;
 
@@ -174,14 +177,45 @@ public final class Probabilities implements Serializable {
   public List<Probability> forComponents(List<String> components) {
     Check.notNull(components, "the list of components");
     List<Probability> found = new ArrayList<>(components.size());
+    forEach(components, found::add);
+    return found;
+  }
+
+  /**
+   * Writes the probabilities of some components into arrays.
+   *
+   * @throws IllegalArgumentException if components are not covered; the message lists all of them
+   */
+  void fill(List<String> components, double[] working, double[] failing) {
+    if (byName.isEmpty() && others != null) {
+      Arrays.fill(working, others.working());
+      Arrays.fill(failing, others.failing());
+      return;
+    }
+    forEach(components, new Filler(working, failing));
+  }
+
+  /** Takes the values in the order of the components. */
+  private void forEach(List<String> components, Consumer<Probability> taker) {
     List<String> missing = new ArrayList<>();
+    Iterator<Map.Entry<String, Probability>> listed = byName.entrySet().iterator();
+    boolean inOrder = true;
     for (String component : components) {
-      Check.notNull(component, "a name in the list of components");
-      Probability value = byName.getOrDefault(component, others);
+      Probability value = null;
+      if (inOrder && listed.hasNext()) {
+        // registers often list the components in this very order, which spares a look-up
+        Map.Entry<String, Probability> entry = listed.next();
+        value = entry.getKey().equals(component) ? entry.getValue() : null;
+      }
+      if (value == null) {
+        inOrder = false;
+        Check.notNull(component, "a name in the list of components");
+        value = byName.getOrDefault(component, others);
+      }
       if (value == null) {
         missing.add(component);
       } else {
-        found.add(value);
+        taker.accept(value);
       }
     }
     if (!missing.isEmpty()) {
@@ -190,7 +224,23 @@ public final class Probabilities implements Serializable {
               + Check.listedInFull(missing)
               + "; set each with Probabilities.with, or all at once with Probabilities.all");
     }
-    return found;
+  }
+
+  private static final class Filler implements Consumer<Probability> {
+    private final double[] working;
+    private final double[] failing;
+    private int next;
+
+    Filler(double[] working, double[] failing) {
+      this.working = working;
+      this.failing = failing;
+    }
+
+    @Override
+    public void accept(Probability value) {
+      working[next] = value.working();
+      failing[next++] = value.failing();
+    }
   }
 
   @Override

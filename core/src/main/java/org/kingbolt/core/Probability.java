@@ -25,7 +25,7 @@ public final class Probability implements Comparable<Probability>, Serializable 
   private static final long serialVersionUID = 1L;
 
   /** How far the two sides may be from adding up to 1. */
-  private static final double SUM_TOLERANCE = 1e-8;
+  private static final double SUM_TOLERANCE = 1e-12;
 
   private final double working;
   private final double failing;
@@ -67,12 +67,12 @@ public final class Probability implements Comparable<Probability>, Serializable 
    * @param failing the probability of having failed, from 0 to 1
    * @return the probability
    * @throws IllegalArgumentException if a number is NaN or outside [0, 1], or if the two do not add
-   *     up to 1 within 1e-8
+   *     up to 1 within 1e-12
    */
   public static Probability of(double working, double failing) {
     double p = Check.probability(working, "probability of working");
     double q = Check.probability(failing, "probability of failing");
-    if (!(Math.abs(p + q - 1) <= SUM_TOLERANCE)) {
+    if (!addUp(p, q)) {
       throw new IllegalArgumentException(
           "working "
               + p
@@ -86,12 +86,17 @@ public final class Probability implements Comparable<Probability>, Serializable 
     return new Probability(p, q);
   }
 
+  /** Whether two sides add up to 1. */
+  static boolean addUp(double working, double failing) {
+    return Math.abs(working + failing - 1) <= SUM_TOLERANCE;
+  }
+
   /**
-   * Makes a probability from both sides as an exact computation left them, where rounding may have
-   * carried a side past 1 by a few units in the last place.
+   * Makes a probability from both sides as a computation left them: rounding may have carried a
+   * side past 1, and the sides of a system add up to 1 only as far as those of its components do.
    */
   static Probability computed(double working, double failing) {
-    return of(Math.min(working, 1), Math.min(failing, 1));
+    return new Probability(Math.min(working, 1), Math.min(failing, 1));
   }
 
   /**

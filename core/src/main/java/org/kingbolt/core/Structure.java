@@ -197,7 +197,8 @@ public abstract sealed class Structure implements Serializable
    * Works while all components of some set work.
    *
    * @param sets path sets, minimal or not; at least one, none empty, each with different names
-   * @return the structure; components are ordered by first mention in the sets' own iteration order
+   * @return the structure; components are ordered by first mention in the sets' own iteration
+   *     order, which {@code Set.of} changes from run to run
    * @throws IllegalArgumentException if there are no sets, or a set is empty, or a name is blank or
    *     listed twice in one set
    */
@@ -209,7 +210,8 @@ public abstract sealed class Structure implements Serializable
    * Fails when all components of some set have failed.
    *
    * @param sets cut sets, minimal or not; at least one, none empty, each with different names
-   * @return the structure; components are ordered by first mention in the sets' own iteration order
+   * @return the structure; components are ordered by first mention in the sets' own iteration
+   *     order, which {@code Set.of} changes from run to run
    * @throws IllegalArgumentException if there are no sets, or a set is empty, or a name is blank or
    *     listed twice in one set
    */
@@ -240,7 +242,9 @@ public abstract sealed class Structure implements Serializable
    * demand.
    *
    * @param demand from 1 to the sum of the capacities, in the same unit
-   * @param capacities the capacity of each component, 0 or more; their order is kept
+   * @param capacities the capacity of each component, 0 or more; their order is kept, so use a map
+   *     with an order of its own where the text or the diagram must come out the same in every run
+   *     ({@code Map.of} has none)
    * @return the structure
    * @throws IllegalArgumentException if a capacity is negative, or the demand is out of range, or
    *     there are no components, or a name is blank
@@ -306,7 +310,8 @@ public abstract sealed class Structure implements Serializable
   /**
    * Reads a structure's text, such as {@code series(intake, parallel(pumpA, pumpB))}.
    *
-   * <p>The text names the methods of this class with their arguments. A component is its name; a
+   * <p>The text names the methods of this class with their arguments; members of sets and carriers
+   * of capacity may be structures there, as {@link #replace} makes them. A component is its name; a
    * name with anything but letters, digits, {@code _}, {@code -} and {@code .} stands in double
    * quotes, with {@code \"}, {@code \\}, {@code \n}, {@code \t} and {@code \\u0041} inside. Blank
    * space and line breaks may stand between words.

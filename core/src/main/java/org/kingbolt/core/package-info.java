@@ -15,9 +15,10 @@
  * independently of each other. Results support a qualified engineer's judgement; they never replace
  * local codes, standards and licensed practice, least of all where people can be hurt.
  *
- * <p>All values are immutable and safe to share between threads. Nothing accepts or returns null.
- * The package may use {@code org.kingbolt.core.diagram}, Guava and commons-math3; it does no input
- * or output and keeps no global state.
+ * <p>All values are immutable and safe to share between threads; an {@link
+ * org.kingbolt.core.Evaluator}, which owns scratch, is for one thread. Nothing accepts or returns
+ * null. The package may use {@code org.kingbolt.core.diagram}, Guava and commons-math3; it does no
+ * input or output and keeps no global state.
  */
 @NullMarked
 package org.kingbolt.core;

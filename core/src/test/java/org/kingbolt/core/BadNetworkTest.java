@@ -169,7 +169,13 @@ class BadNetworkTest {
             "lone failing node",
             () -> line().node("island", "bus").connectingAll(),
             "no route from \"x\" to \"island\"",
-            mend));
+            mend),
+        illegal(
+            "misspelt failing node",
+            () -> line().node("X", "bus").connecting("x", "z"),
+            "node \"X\"",
+            "no link touches it",
+            "the linked nodes are \"x\""));
   }
 
   @ParameterizedTest

@@ -2,6 +2,7 @@ package org.kingbolt.core;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertNotEquals;
+import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.io.ByteArrayInputStream;
@@ -107,8 +108,8 @@ class ProbabilityTest {
 
   @Test
   void sum_maybeOffByRounding() {
-    assertEquals(0.500000005, Probability.of(0.5, 0.500000005).failing());
-    assertEquals(0.499999995, Probability.of(0.5, 0.499999995).failing());
+    assertEquals(0.5000000000005, Probability.of(0.5, 0.5000000000005).failing());
+    assertEquals(0.4999999999995, Probability.of(0.5, 0.4999999999995).failing());
   }
 
   @Test
@@ -138,12 +139,12 @@ class ProbabilityTest {
           0.3333333333333333    | 0.6666666666666666 | working 0.333333333333, failing 0.666666666667
           0.999999999           | 1e-9               | working 0.999999999, failing 1e-09
           1                     | 5e-18              | working 1, failing 5e-18
-          1                     | 1.5e-10            | working 1, failing 1.5e-10
+          1                     | 1.5e-13            | working 1, failing 1.5e-13
           1                     | 4.9e-324           | working 1, failing 4.9e-324
           0.9999                | 1e-4               | working 0.9999, failing 0.0001
           0.9999001             | 9.99e-5            | working 0.9999001, failing 9.99e-05
           1.234567890123456e-3  | 0.998765432109877  | working 0.00123456789012, failing 0.99876543211
-          1.234567890123456e-12 | 1                  | working 1.23456789012e-12, failing 1
+          1.234567890123456e-13 | 1                  | working 1.23456789012e-13, failing 1
           1.999999999999999e-7  | 0.9999998          | working 2e-07, failing 0.9999998
           1.0000000001e-30      | 1                  | working 1.0000000001e-30, failing 1
           """)
@@ -196,5 +197,21 @@ class ProbabilityTest {
   void roundingPastOne_isCutOff() {
     assertEquals(Probability.CERTAIN, Probability.computed(1.0000000000000002, 0));
     assertEquals(Probability.IMPOSSIBLE, Probability.computed(0, 1.0000000000000002));
+  }
+
+  /** Sides that are accepted one by one never make a system's figure fail. */
+  @Test
+  void nearlyExactSides_addUpOverManyComponents() {
+    Probability nearly = Probability.of(0.5, 0.5 + 9e-13);
+    String[] names = new String[200];
+    for (int i = 0; i < names.length; i++) {
+      names[i] = "c" + i;
+    }
+    Structure many = Structure.atLeast(100, names);
+    Probability exact = many.reliability(0.5);
+    Probability result = many.compile().reliability(Probabilities.all(nearly));
+    assertEquals(exact.working(), result.working(), 1e-9);
+    assertEquals(exact.failing(), result.failing(), 1e-9);
+    assertThrows(IllegalArgumentException.class, () -> Probability.of(0.9, 0.1 + 5e-9));
   }
 }

@@ -88,6 +88,7 @@ class PackageBoundariesTest {
             .collect(Collectors.toCollection(TreeSet::new));
     assertEquals(
         Set.of(
+            "BatchScan",
             "Composer",
             "Diagram",
             "Evaluation",
@@ -95,6 +96,8 @@ class PackageBoundariesTest {
             "FrontierTooWideException",
             "MinimalSolutions",
             "NetworkProblem",
+            "Operator",
+            "Scan",
             "SetDiagram",
             "SetWalk",
             "StateCounts",

@@ -66,15 +66,23 @@ class ReadmeTest {
                 .build()) {
       String path = System.getProperty("surefire.test.class.path");
       shell.addToClasspath(path == null ? System.getProperty("java.class.path") : path);
-      String rest = code;
-      while (!rest.isBlank()) {
-        SourceCodeAnalysis.CompletionInfo next = shell.sourceCodeAnalysis().analyzeCompletion(rest);
-        for (SnippetEvent event : shell.eval(next.source())) {
-          assertEquals(Snippet.Status.VALID, event.status(), () -> faults(shell, event.snippet()));
-          assertNull(event.exception(), () -> String.valueOf(event.exception()));
+      String open = "";
+      for (String line : code.lines().toList()) {
+        // as somebody types it: what is complete at the end of a line is run there and then
+        open += line + "\n";
+        SourceCodeAnalysis.CompletionInfo typed =
+            shell.sourceCodeAnalysis().analyzeCompletion(open);
+        while (typed.completeness().isComplete() && !open.isBlank()) {
+          for (SnippetEvent event : shell.eval(typed.source())) {
+            assertEquals(
+                Snippet.Status.VALID, event.status(), () -> faults(shell, event.snippet()));
+            assertNull(event.exception(), () -> String.valueOf(event.exception()));
+          }
+          open = typed.remaining();
+          typed = shell.sourceCodeAnalysis().analyzeCompletion(open);
         }
-        rest = next.remaining();
       }
+      assertEquals("", open.strip(), "code that is not complete");
     }
     return out.toString(StandardCharsets.UTF_8).replace(System.lineSeparator(), "\n");
   }

@@ -75,4 +75,14 @@ public final class Importance {
         .forComponents(system.components());
     return new ImportanceAtProbabilities(system, p);
   }
+
+  /**
+   * Says what this is and what to call on it.
+   *
+   * @return one line
+   */
+  @Override
+  public String toString() {
+    return "Importance[" + system + "]; call structural(), or given(probabilities) first";
+  }
 }

@@ -31,4 +31,14 @@ public final class ImportanceAtProbabilities {
     return Ranking.of(
         "Birnbaum importance", system.components(), system.evaluation(p).derivatives());
   }
+
+  /**
+   * Says what this is and what to call on it.
+   *
+   * @return one line
+   */
+  @Override
+  public String toString() {
+    return "Importance[" + system + "] at given probabilities; call birnbaum()";
+  }
 }

@@ -68,15 +68,16 @@ public final class Composer {
    * @param network the network over the slots
    * @param dual whether the dual of the network is meant
    * @param slotParts the expression in each slot
+   * @param meter hears of the search for an order to sweep it in
    * @return the expression's number
    */
-  public int network(NetworkProblem network, boolean dual, int[] slotParts) {
-    return new NetworkReducer(this, network, dual, slotParts).expression();
+  public int network(NetworkProblem network, boolean dual, int[] slotParts, WorkMeter meter) {
+    return new NetworkReducer(this, network, dual, slotParts, meter).expression();
   }
 
   /** Adds a network that no reduction takes apart. */
-  int sweep(NetworkProblem network, boolean dual, int[] slotParts) {
-    FrontierPlan plan = new FrontierPlan(network);
+  int sweep(NetworkProblem network, boolean dual, int[] slotParts, WorkMeter meter) {
+    FrontierPlan plan = new FrontierPlan(network, meter);
     widest = Math.max(widest, plan.width());
     StateRule rule = network.directed ? new DirectedRule(plan) : new UndirectedRule(plan);
     Operator operator = Operator.swept(rule);

@@ -148,6 +148,16 @@ public final class Diagram {
     return high[id];
   }
 
+  /** The array behind {@link #low(int)}, for the innermost loops; not to be written to. */
+  int[] lows() {
+    return low;
+  }
+
+  /** The array behind {@link #high(int)}, for the innermost loops; not to be written to. */
+  int[] highs() {
+    return high;
+  }
+
   /**
    * Returns the level of a node.
    *

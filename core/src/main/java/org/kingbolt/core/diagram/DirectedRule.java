@@ -88,17 +88,14 @@ final class DirectedRule extends FrontierRule {
   }
 
   @Override
-  int join(int link) {
-    int from = position(plan.problem.from[link]);
-    int to = position(plan.problem.to[link]);
+  void join(int from, int to, boolean arc) {
     if (((failed >>> from | failed >>> to) & 1) == 1) {
-      return CONTINUES;
+      return;
     }
     pass(from, to);
-    if (!plan.problem.arc[link]) {
+    if (!arc) {
       pass(to, from);
     }
-    return CONTINUES;
   }
 
   /** From now on, whatever reaches {@code from} reaches {@code to}. */
@@ -142,8 +139,7 @@ final class DirectedRule extends FrontierRule {
   }
 
   @Override
-  int leave(int node) {
-    int at = position(node);
+  int leave(int node, int at) {
     boolean wasReached = (reached >>> at & 1) == 1;
     if (!wasReached && plan.problem.target[node]) {
       long before = 0;

@@ -38,22 +38,19 @@ public final class Evaluation {
    */
   public static Evaluation of(Diagram diagram, double[] working, double[] failing) {
     Evaluation evaluation = new Evaluation(diagram, working.clone(), failing.clone());
-    evaluation.works[Diagram.WORKS] = 1;
-    evaluation.fails[Diagram.FAILS] = 1;
+    double[] works = evaluation.works;
+    double[] fails = evaluation.fails;
+    works[Diagram.WORKS] = 1;
+    fails[Diagram.FAILS] = 1;
+    int[] low = diagram.lows();
+    int[] high = diagram.highs();
     for (int level = diagram.levels() - 1; level >= 0; level--) {
       int variable = diagram.variableAt(level);
-      evaluation.scan(diagram.from(level), diagram.to(level), working[variable], failing[variable]);
+      double p = working[variable];
+      double q = failing[variable];
+      Kernels.up(low, high, works, fails, diagram.from(level), diagram.to(level), p, q);
     }
     return evaluation;
-  }
-
-  private void scan(int from, int to, double p, double q) {
-    for (int id = from; id < to; id++) {
-      int low = diagram.low(id);
-      int high = diagram.high(id);
-      works[id] = p * works[high] + q * works[low];
-      fails[id] = p * fails[high] + q * fails[low];
-    }
   }
 
   /**

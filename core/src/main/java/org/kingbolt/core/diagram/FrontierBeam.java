@@ -18,7 +18,20 @@ import java.util.Set;
 final class FrontierBeam {
 
   /** The set of nodes that a partial order has swept, and those of them with unswept neighbours. */
-  private record Partial(long[] swept, int[] frontier, long hash, double cost) {
+  private static final class Partial {
+    final long[] swept;
+    final int[] frontier;
+    final long hash;
+    final double cost;
+    final int met;
+
+    Partial(long[] swept, int[] frontier, long hash, double cost, int met) {
+      this.swept = swept;
+      this.frontier = frontier;
+      this.hash = hash;
+      this.cost = cost;
+      this.met = met;
+    }
 
     boolean has(int node) {
       return (swept[node >> 6] >>> node & 1) != 0;
@@ -35,8 +48,10 @@ final class FrontierBeam {
 
   private final int[][] neighbours;
   private final int[] nodes;
+  private final boolean[] pair;
   private final int beam;
   private final long[] label;
+  private final WorkMeter meter;
 
   /** By step and place in the beam: the node swept, and the place of the partial order before. */
   private final List<int[]> swept = new ArrayList<>();
@@ -44,7 +59,9 @@ final class FrontierBeam {
   private final List<int[]> origin = new ArrayList<>();
   private List<Partial> partials = new ArrayList<>();
 
-  private FrontierBeam(int[][] neighbours, int[] nodes, int beam) {
+  private FrontierBeam(int[][] neighbours, int[] nodes, boolean[] pair, int beam, WorkMeter meter) {
+    this.pair = pair;
+    this.meter = meter;
     this.neighbours = neighbours;
     this.nodes = nodes;
     this.beam = beam;
@@ -61,19 +78,22 @@ final class FrontierBeam {
    *
    * @param neighbours of each node, each once
    * @param nodes a connected set of nodes
+   * @param pair true for the two terminals between which a connection is asked; all false where
+   *     there are more
    * @param beam how many partial orders to follow
+   * @param meter hears of every continuation
    * @return the nodes in the order of the cheapest sweep found
    */
-  static int[] order(int[][] neighbours, int[] nodes, int beam) {
-    return new FrontierBeam(neighbours, nodes, beam).search();
+  static int[] order(int[][] neighbours, int[] nodes, boolean[] pair, int beam, WorkMeter meter) {
+    return new FrontierBeam(neighbours, nodes, pair, beam, meter).search();
   }
 
   private int[] search() {
-    Partial nothing = new Partial(new long[(neighbours.length + 63) >> 6], new int[0], 0, 0);
+    Partial nothing = new Partial(new long[(neighbours.length + 63) >> 6], new int[0], 0, 0, 0);
     partials.add(nothing);
     List<Step> steps = new ArrayList<>();
     for (int node : nodes) {
-      steps.add(new Step(0, node, FrontierOrder.cost(1, 1), label[node]));
+      steps.add(new Step(0, node, FrontierOrder.cost(1, pair[node] ? 1 : 0), label[node]));
     }
     for (int swept = 0; swept < nodes.length; swept++) {
       take(steps);
@@ -98,7 +118,11 @@ final class FrontierBeam {
         for (int node : neighbours[edge]) {
           if (!partial.has(node) && seenBy[node] != i + 1) {
             seenBy[node] = i + 1;
-            double cost = partial.cost + FrontierOrder.cost(widthAfter(partial, node), 1);
+            meter.at(steps.size());
+            double cost =
+                partial.cost
+                    + FrontierOrder.cost(
+                        widthAfter(partial, node), partial.met + (pair[node] ? 1 : 0));
             steps.add(new Step(i, node, cost, partial.hash ^ label[node]));
           }
         }
@@ -158,6 +182,11 @@ final class FrontierBeam {
         frontier[count++] = node;
       }
     }
-    return new Partial(set, Arrays.copyOf(frontier, count), step.hash, step.cost);
+    return new Partial(
+        set,
+        Arrays.copyOf(frontier, count),
+        step.hash,
+        step.cost,
+        before.met + (pair[step.node] ? 1 : 0));
   }
 }

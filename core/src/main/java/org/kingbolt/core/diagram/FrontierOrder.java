@@ -22,23 +22,37 @@ final class FrontierOrder {
   /** No search is made for sweeps that promise to cost less. */
   private static final double CHEAP = 1_000;
 
+  /** Nor for those that no search can mend. */
+  private static final double HOPELESS = 1e18;
+
   private static final double STATES_A_STEP = 20;
 
   /** Assumed growth of the number of states with one more frontier node. */
   private static final double GROWTH = 2.2;
 
+  /** Orders that differ by less count as equally narrow. */
+  private static final double AS_NARROW = 1.1;
+
+  /** Growth with one terminal met, for every frontier node: as counted on square grids. */
+  private static final double ONE_MET = 0.25;
+
+  /** With both met many histories are settled: as counted on square grids. */
+  private static final double BOTH_MET = 0.65;
+
   private final NetworkProblem problem;
   private final int[][] linksAt;
+  private final WorkMeter meter;
   private double cost;
 
-  private FrontierOrder(NetworkProblem problem) {
+  private FrontierOrder(NetworkProblem problem, WorkMeter meter) {
     this.problem = problem;
+    this.meter = meter;
     this.linksAt = problem.linksAt();
   }
 
   /** The nodes connected with the source, in sweeping order. */
-  static int[] best(NetworkProblem problem) {
-    FrontierOrder search = new FrontierOrder(problem);
+  static int[] best(NetworkProblem problem, WorkMeter meter) {
+    FrontierOrder search = new FrontierOrder(problem, meter);
     int[] best = search.sweepFrom(problem.source);
     double bestCost = search.cost;
     int[] reached = best.clone();
@@ -51,20 +65,46 @@ final class FrontierOrder {
         best = order;
       }
     }
-    if (bestCost > CHEAP) {
+    if (bestCost > CHEAP && bestCost < HOPELESS) {
       double worth = bestCost / (STATES_A_STEP * reached.length);
       int beam = (int) Math.max(NARROWEST_BEAM, Math.min(WIDEST_BEAM, worth));
-      int[] order = FrontierBeam.order(search.neighbours(), reached, beam);
-      if (search.costOf(order) < bestCost) {
-        best = order;
-      }
+      best = search.searched(best, reached, beam);
     }
     return best;
   }
 
-  /** The number of states that meeting some links is likely to cost. */
-  static double cost(int width, int links) {
-    return Math.pow(GROWTH, width) * links;
+  /**
+   * Beam search that does not mind when terminals are met; among orders that are as narrow, the one
+   * in which one terminal alone is met for the shortest time.
+   */
+  private int[] searched(int[] greedy, int[] reached, int beam) {
+    int[][] neighbours = neighbours();
+    boolean[] pair = pair();
+    int[] blind = FrontierBeam.order(neighbours, reached, new boolean[pair.length], beam, meter);
+    int[] best = costOf(blind, false) < costOf(greedy, false) ? blind : greedy;
+    if (isPair()) {
+      int[] aware = FrontierBeam.order(neighbours, reached, pair, beam, meter);
+      boolean narrow = costOf(aware, false) <= AS_NARROW * costOf(best, false);
+      return narrow && costOf(aware, true) < costOf(best, true) ? aware : best;
+    }
+    return best;
+  }
+
+  /**
+   * The number of states that a step is likely to cost, in units of a step without links.
+   *
+   * @param width nodes on the frontier
+   * @param met how many of two terminals have been met, or -1 if there are more than two: one
+   *     alone, whose block is one of many, is what costs most
+   */
+  static double cost(int width, int met) {
+    double states = Math.pow(GROWTH, width);
+    return met == 1 ? states * (ONE_MET * width + 1) : met == 2 ? states * BOTH_MET : states;
+  }
+
+  /** How many of two terminals have been met with one more node, as {@link #cost} counts them. */
+  private int met(int node, int before) {
+    return before < 0 || !problem.terminal(node) ? before : before + 1;
   }
 
   private int[][] neighbours() {
@@ -81,8 +121,8 @@ final class FrontierOrder {
     return neighbours;
   }
 
-  /** The estimated cost of a sweep in a given order. */
-  private double costOf(int[] order) {
+  /** The estimated cost of a sweep in a given order, with or without minding the terminals. */
+  private double costOf(int[] order, boolean minding) {
     boolean[] swept = new boolean[problem.nodes()];
     int[] unswept = new int[problem.nodes()];
     for (int node = 0; node < unswept.length; node++) {
@@ -90,6 +130,7 @@ final class FrontierOrder {
     }
     double sum = 0;
     int width = 0;
+    int met = minding && isPair() ? 0 : -1;
     for (int node : order) {
       swept[node] = true;
       int links = 0;
@@ -100,10 +141,29 @@ final class FrontierOrder {
         links += swept[other] ? 1 : 0;
         leaving += swept[other] && unswept[other] == 0 ? 1 : 0;
       }
-      sum += cost(width + 1, links);
+      met = met(node, met);
+      sum += cost(width + 1, met) * links;
       width += (unswept[node] > 0 ? 1 : 0) - leaving;
     }
     return sum;
+  }
+
+  /** The two terminals of a pair as a set of nodes, or nothing. */
+  private boolean[] pair() {
+    boolean[] pair = new boolean[problem.nodes()];
+    for (int node = 0; node < pair.length && isPair(); node++) {
+      pair[node] = problem.terminal(node);
+    }
+    return pair;
+  }
+
+  /** Whether there is one target only; the block of either terminal is then one of many. */
+  private boolean isPair() {
+    int targets = 0;
+    for (boolean isTarget : problem.target) {
+      targets += isTarget ? 1 : 0;
+    }
+    return targets == 1;
   }
 
   /** Greedy sweep; leaves its estimated cost in {@link #cost}. */
@@ -120,6 +180,7 @@ final class FrontierOrder {
     int next = start;
     int oldest = 0;
     while (next >= 0) {
+      meter.at(nodes >> 3);
       position[next] = placed;
       order[placed++] = next;
       for (int link : linksAt[next]) {
@@ -132,7 +193,7 @@ final class FrontierOrder {
       next = cheapestNeighbour(order, oldest, placed, position, unplaced);
     }
     int[] sweep = Arrays.copyOf(order, placed);
-    cost = costOf(sweep);
+    cost = costOf(sweep, false);
     return sweep;
   }
 

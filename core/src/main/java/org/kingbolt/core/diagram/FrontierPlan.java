@@ -28,16 +28,22 @@ final class FrontierPlan {
   /** Terminals that enter at or after each operation. */
   private final int[] terminalsLeft;
 
-  /** Operation of each decision, and the frontier's nodes before it in order of entry. */
+  /** Operation of each decision. */
   private final int[] decision;
 
+  /** The frontier's nodes before each operation, in order of entry. */
   private final int[][] frontier;
+
+  /** Where on the frontier a link's two ends are, or the node that leaves. */
+  private final int[] firstPlace;
+
+  private final int[] secondPlace;
 
   private final int operations;
 
-  FrontierPlan(NetworkProblem problem) {
+  FrontierPlan(NetworkProblem problem, WorkMeter meter) {
     this.problem = problem;
-    int[] links = linksInOrder(problem, FrontierOrder.best(problem));
+    int[] links = linksInOrder(problem, FrontierOrder.best(problem, meter));
     int capacity = links.length + 2 * problem.nodes();
     this.kind = new int[capacity];
     this.argument = new int[capacity];
@@ -57,7 +63,10 @@ final class FrontierPlan {
       }
     }
     this.decision = Arrays.copyOf(found, count);
-    this.frontier = frontiers();
+    this.frontier = new int[operations + 1][];
+    this.firstPlace = new int[operations];
+    this.secondPlace = new int[operations];
+    followFrontier();
   }
 
   /** Each link when the later of its two nodes is met, links to earlier nodes first. */
@@ -116,32 +125,31 @@ final class FrontierPlan {
     return op;
   }
 
-  private int[][] frontiers() {
-    int[][] result = new int[decision.length][];
-    int[] active = new int[problem.nodes()];
-    int count = 0;
-    int next = 0;
+  private void followFrontier() {
+    int[] place = new int[problem.nodes()];
+    int[] active = {};
     for (int op = 0; op < operations; op++) {
-      if (next < decision.length && decision[next] == op) {
-        result[next++] = Arrays.copyOf(active, count);
-      }
+      frontier[op] = active;
+      int node = argument[op];
       if (kind[op] == ENTER) {
-        active[count++] = argument[op];
-      } else if (kind[op] == LEAVE) {
-        count = remove(active, count, argument[op]);
+        place[node] = active.length;
+        active = Arrays.copyOf(active, active.length + 1);
+        active[active.length - 1] = node;
+      } else if (kind[op] == LINK) {
+        firstPlace[op] = place[problem.from[node]];
+        secondPlace[op] = place[problem.to[node]];
+      } else {
+        int at = place[node];
+        firstPlace[op] = at;
+        int[] rest = Arrays.copyOf(active, active.length - 1);
+        for (int i = at; i < rest.length; i++) {
+          rest[i] = active[i + 1];
+          place[rest[i]] = i;
+        }
+        active = rest;
       }
     }
-    return result;
-  }
-
-  /** Removes a node from a list, keeping the order of the others; returns the new length. */
-  static int remove(int[] active, int count, int node) {
-    int at = 0;
-    while (active[at] != node) {
-      at++;
-    }
-    System.arraycopy(active, at + 1, active, at, count - at - 1);
-    return count - 1;
+    frontier[operations] = active;
   }
 
   /** The most nodes on the frontier at any moment of the sweep. */
@@ -185,8 +193,17 @@ final class FrontierPlan {
     return decision[step];
   }
 
-  int[] frontierBefore(int step) {
-    return frontier[step];
+  /** The frontier's nodes before an operation, in order of entry; not to be changed. */
+  int[] frontierBefore(int op) {
+    return frontier[op];
+  }
+
+  int firstPlace(int op) {
+    return firstPlace[op];
+  }
+
+  int secondPlace(int op) {
+    return secondPlace[op];
   }
 
   int slot(int step) {

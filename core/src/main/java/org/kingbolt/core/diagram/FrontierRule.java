@@ -1,7 +1,5 @@
 package org.kingbolt.core.diagram;
 
-import java.util.Arrays;
-
 /**
  * What both kinds of network sweep share: reading a packed state, applying one decision and the
  * operations that follow it by themselves, and writing the next state.
@@ -10,14 +8,14 @@ abstract class FrontierRule implements StateRule {
 
   final FrontierPlan plan;
 
-  /** The frontier's nodes at this moment, in order of entry. */
-  final int[] active;
+  /** The frontier's nodes before the present operation, in order of entry; read only. */
+  int[] active = {};
 
+  /** How many nodes are on the frontier, one that is just entering included. */
   int activeCount;
 
   FrontierRule(FrontierPlan plan) {
     this.plan = plan;
-    this.active = new int[plan.problem.nodes()];
   }
 
   @Override
@@ -39,11 +37,10 @@ abstract class FrontierRule implements StateRule {
 
   @Override
   public final int next(int step, boolean works, long[] pool, int at, int length, StateWords out) {
-    int[] frontier = plan.frontierBefore(step);
-    System.arraycopy(frontier, 0, active, 0, frontier.length);
-    activeCount = frontier.length;
-    unpack(pool, at, length);
     int op = plan.operationOf(step);
+    active = plan.frontierBefore(op);
+    activeCount = active.length;
+    unpack(pool, at, length);
     int settled = apply(op, works);
     return settled != CONTINUES ? settled : run(op + 1, step + 1, out);
   }
@@ -60,25 +57,30 @@ abstract class FrontierRule implements StateRule {
     if (nextStep == plan.decisions()) {
       return SETTLED_FAILS;
     }
+    active = plan.frontierBefore(end);
     pack(out);
     return CONTINUES;
   }
 
   private int apply(int op, boolean works) {
     int argument = plan.argument(op);
-    int settled =
-        switch (plan.kind(op)) {
-          case FrontierPlan.ENTER -> {
-            active[activeCount++] = argument;
-            yield enter(argument, works);
-          }
-          case FrontierPlan.LINK -> works ? join(argument) : CONTINUES;
-          default -> {
-            int left = leave(argument);
-            activeCount = FrontierPlan.remove(active, activeCount, argument);
-            yield left;
-          }
-        };
+    active = plan.frontierBefore(op);
+    int settled = CONTINUES;
+    switch (plan.kind(op)) {
+      case FrontierPlan.ENTER -> {
+        activeCount++;
+        settled = enter(argument, works);
+      }
+      case FrontierPlan.LINK -> {
+        if (works) {
+          join(plan.firstPlace(op), plan.secondPlace(op), plan.problem.arc[argument]);
+        }
+      }
+      default -> {
+        settled = leave(argument, plan.firstPlace(op));
+        activeCount--;
+      }
+    }
     if (settled == CONTINUES && plan.allTerminalsMetBefore(op + 1) && answered()) {
       return SETTLED_WORKS;
     }
@@ -94,29 +96,15 @@ abstract class FrontierRule implements StateRule {
   /** Writes the state of the {@link #active} nodes in a canonical form. */
   abstract void pack(StateWords out);
 
-  /** A node enters, working or failed; it is the last of {@link #active}. */
+  /** A node enters, working or failed; its place is the last one. */
   abstract int enter(int node, boolean works);
 
-  /** A working link is met. */
-  abstract int join(int link);
+  /** A working link is met between two places on the frontier. */
+  abstract void join(int from, int to, boolean arc);
 
-  /** A node is about to leave {@link #active}. */
-  abstract int leave(int node);
+  /** The node at a place leaves the frontier. */
+  abstract int leave(int node, int at);
 
   /** Whether all terminals met so far are served; asked once all have been met. */
   abstract boolean answered();
-
-  /** Position of a node in {@link #active}. */
-  final int position(int node) {
-    int at = 0;
-    while (active[at] != node) {
-      at++;
-    }
-    return at;
-  }
-
-  @Override
-  public String toString() {
-    return getClass().getSimpleName() + Arrays.toString(Arrays.copyOf(active, activeCount));
-  }
 }

@@ -19,6 +19,7 @@ final class NetworkReducer {
 
   private final Composer composer;
   private final boolean dual;
+  private final WorkMeter meter;
 
   /** What must work besides the networks that are left. */
   private int[] factors = new int[8];
@@ -31,9 +32,11 @@ final class NetworkReducer {
    *
    * @param parts the expression in each slot of the network
    */
-  NetworkReducer(Composer composer, NetworkProblem network, boolean dual, int[] parts) {
+  NetworkReducer(
+      Composer composer, NetworkProblem network, boolean dual, int[] parts, WorkMeter meter) {
     this.composer = composer;
     this.dual = dual;
+    this.meter = meter;
     NetworkGraph graph = new NetworkGraph(this, network.nodes(), network.source);
     for (int link = 0; link < network.links(); link++) {
       int slot = network.linkSlot[link];
@@ -51,9 +54,10 @@ final class NetworkReducer {
     run(graph);
   }
 
-  private NetworkReducer(Composer composer, boolean dual, NetworkGraph graph) {
+  private NetworkReducer(Composer composer, boolean dual, NetworkGraph graph, WorkMeter meter) {
     this.composer = composer;
     this.dual = dual;
+    this.meter = meter;
     run(graph);
   }
 
@@ -119,7 +123,7 @@ final class NetworkReducer {
 
   /** The expression of a part that stands between two nodes and holds no such part itself. */
   int module(NetworkGraph part) {
-    return new NetworkReducer(composer, dual, part).expression();
+    return new NetworkReducer(composer, dual, part, meter).expression();
   }
 
   private void takeNode(NetworkGraph graph, int node) {
@@ -322,6 +326,6 @@ final class NetworkReducer {
     }
     NetworkProblem problem =
         new NetworkProblem(from, to, arc, linkSlot, nodeSlot, number[graph.source], target);
-    factor(composer.sweep(problem, dual, parts));
+    factor(composer.sweep(problem, dual, parts, meter));
   }
 }

@@ -27,7 +27,7 @@ final class StateSweep {
       int[] low = new int[count];
       int[] high = new int[count];
       for (int state = 0; state < count; state++) {
-        meter.at(held + state + ((following.words() + present.words()) >> 2));
+        meter.at(held + state + nodes(present, following, 0));
         low[state] = follow(rule, step, false, present, state, next, following);
         high[state] = follow(rule, step, true, present, state, next, following);
       }
@@ -70,7 +70,7 @@ final class StateSweep {
       double down = fails[rule.slot(step)];
       int count = present.count();
       for (int state = 0; state < count; state++) {
-        meter.at((following.words() + present.words()) >> 2);
+        meter.at(nodes(present, following, mass.length + nextMass.length));
         if (nextMass.length < following.count() + 2) {
           nextMass = Arrays.copyOf(nextMass, nextMass.length << 1);
         }
@@ -88,6 +88,11 @@ final class StateSweep {
       nextMass = spareMass;
       Arrays.fill(nextMass, 0);
     }
+  }
+
+  /** The memory of two layers and their masses, in nodes. */
+  private static long nodes(StateLayer present, StateLayer following, long masses) {
+    return (present.bytes() + following.bytes() + 12 * masses) / WorkMeter.BYTES_PER_NODE;
   }
 
   private static void add(int to, double mass, double[] nextMass, double[] result) {

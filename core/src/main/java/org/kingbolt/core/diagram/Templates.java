@@ -2,6 +2,7 @@ package org.kingbolt.core.diagram;
 
 import java.util.ArrayList;
 import java.util.BitSet;
+import java.util.Comparator;
 import java.util.List;
 
 /**
@@ -104,16 +105,18 @@ public final class Templates {
    * @param sets none empty, at least one; sorted or not, minimal or not
    * @param paths whether the sets are path sets, or else cut sets
    * @param meter hears of every node
-   * @return an operator whose template is the reduced diagram, slots in increasing order. Cost: the
-   *     sets are joined pairwise, so that no set is touched more than a logarithmic number of
-   *     times; sizes depend on the family.
+   * @return an operator whose template is the reduced diagram, slots of common sets close together.
+   *     Cost: the sets are joined pairwise, so that no set is touched more than a logarithmic
+   *     number of times; sizes depend on the family.
    */
   public static Operator family(int n, List<BitSet> sets, boolean paths, WorkMeter meter) {
+    int[] order = FamilyOrder.of(n, sets);
+    List<BitSet> placed = placed(sets, order);
     NodeTable table = new NodeTable(n, meter);
-    int[] made = new int[sets.size()];
+    int[] made = new int[placed.size()];
     for (int i = 0; i < made.length; i++) {
       int id = paths ? Diagram.WORKS : Diagram.FAILS;
-      BitSet set = sets.get(i);
+      BitSet set = placed.get(i);
       for (int slot = set.length() - 1;
           slot >= 0;
           slot = slot > 0 ? set.previousSetBit(slot - 1) : -1) {
@@ -132,7 +135,23 @@ public final class Templates {
         made[count >> 1] = made[count - 1];
       }
     }
-    return Operator.of(table.diagram(made[0], StateSweep.identity(n)));
+    return Operator.of(table.diagram(made[0], order));
+  }
+
+  /** The sets in terms of places in an order, those that begin first in front. */
+  private static List<BitSet> placed(List<BitSet> sets, int[] order) {
+    int[] place = new int[order.length];
+    for (int i = 0; i < order.length; i++) {
+      place[order[i]] = i;
+    }
+    List<BitSet> placed = new ArrayList<>();
+    for (BitSet set : sets) {
+      BitSet moved = new BitSet();
+      set.stream().forEach(slot -> moved.set(place[slot]));
+      placed.add(moved);
+    }
+    placed.sort(Comparator.comparingInt((BitSet set) -> set.nextSetBit(0)));
+    return placed;
   }
 
   /**

@@ -11,7 +11,15 @@ class PathCountTest {
 
   /** OEIS A007764 (seen): paths from corner to corner. */
   @ParameterizedTest
-  @CsvSource({"2, 2", "3, 12", "4, 184", "5, 8512", "6, 1262816"})
+  @CsvSource({
+    "2, 2",
+    "3, 12",
+    "4, 184",
+    "5, 8512",
+    "6, 1262816",
+    "7, 575780564",
+    "8, 789360053252"
+  })
   void squareGrid_hasThePublishedNumberOfPaths(int size, BigInteger paths) {
     assertEquals(paths, cornerToCorner(size, size));
   }

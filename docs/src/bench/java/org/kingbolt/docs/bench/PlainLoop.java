@@ -1,0 +1,64 @@
+package org.kingbolt.docs.bench;
+
+import org.kingbolt.core.diagram.Diagram;
+
+/** What anyone would write: one tail of one vector, level by level over arrays. */
+final class PlainLoop {
+
+  private final int root;
+  private final int[] low;
+  private final int[] high;
+  private final int[] ends;
+
+  PlainLoop(Diagram diagram) {
+    root = diagram.root();
+    low = new int[diagram.size()];
+    high = new int[diagram.size()];
+    ends = new int[diagram.levels()];
+    for (int id = 2; id < low.length; id++) {
+      low[id] = diagram.low(id);
+      high[id] = diagram.high(id);
+    }
+    for (int level = 0; level < ends.length; level++) {
+      ends[level] = diagram.to(level);
+    }
+  }
+
+  double fails(double[] failingByLevel) {
+    return values(failingByLevel)[root];
+  }
+
+  private double[] values(double[] failingByLevel) {
+    double[] fails = new double[low.length];
+    fails[Diagram.FAILS] = 1;
+    int id = 2;
+    for (int level = ends.length - 1; level >= 0; level--) {
+      double q = failingByLevel[level];
+      double p = 1 - q;
+      for (; id < ends[level]; id++) {
+        fails[id] = p * fails[high[id]] + q * fails[low[id]];
+      }
+    }
+    return fails;
+  }
+
+  /** The sum of all derivatives, each as a plain difference. */
+  double derivatives(double[] failingByLevel) {
+    double[] fails = values(failingByLevel);
+    double[] reach = new double[low.length];
+    double sum = 0;
+    reach[root] = 1;
+    int id = root;
+    for (int level = 0; level < ends.length; level++) {
+      double q = failingByLevel[level];
+      double p = 1 - q;
+      int from = level + 1 < ends.length ? ends[level + 1] : 2;
+      for (; id >= from; id--) {
+        reach[low[id]] += q * reach[id];
+        reach[high[id]] += p * reach[id];
+        sum += reach[id] * (fails[low[id]] - fails[high[id]]);
+      }
+    }
+    return sum;
+  }
+}
