@@ -3,7 +3,9 @@ package org.kingbolt.core;
 import java.util.Collection;
 import java.util.List;
 import java.util.Objects;
+import java.util.function.Supplier;
 import java.util.stream.Collectors;
+import org.jspecify.annotations.Nullable;
 
 /** The argument checks of this package and their messages. */
 final class Check {
@@ -23,12 +25,22 @@ final class Check {
 
   /** A component's name: not null, something to see in it. */
   static String name(String name, String where) {
+    return name(name, () -> where + ": a name");
+  }
+
+  /** A component's name in a list, at a place from 1 up. */
+  static String name(String name, String where, int place) {
+    return name(name, () -> where + ": name " + place);
+  }
+
+  /** A component's name; a complaint begins with what it is the name of. */
+  static String name(String name, Supplier<String> what) {
     Objects.requireNonNull(
-        name, () -> where + ": a name is null; give one with at least one visible character");
+        name, () -> what.get() + " is null; give one with at least one visible character");
     if (isInvisible(name)) {
       throw new IllegalArgumentException(
-          where
-              + ": a name is "
+          what.get()
+              + " is "
               + quoted(name)
               + codePoints(name)
               + "; it must have at least one visible character");
@@ -77,17 +89,10 @@ final class Check {
     return new IllegalArgumentException(
         "unknown component "
             + quoted(name)
-            + nearest(name, known)
+            + Spelling.guess(name, known)
             + "; the components are "
-            + listed(known));
-  }
-
-  private static String nearest(String name, Collection<String> known) {
-    return known.stream()
-        .filter(candidate -> candidate.strip().equalsIgnoreCase(name.strip()))
-        .findFirst()
-        .map(candidate -> " (did you mean " + quoted(candidate) + "?)")
-        .orElse("");
+            + listed(known)
+            + (known.isEmpty() ? "" : "; name one of these"));
   }
 
   /** The first few names, quoted, and how many more there are. */
@@ -104,7 +109,7 @@ final class Check {
     return String.join(", ", names.stream().map(Check::quoted).toList());
   }
 
-  static String quoted(String name) {
-    return "\"" + name + "\"";
+  static String quoted(@Nullable String name) {
+    return name == null ? "null" : "\"" + name + "\"";
   }
 }

@@ -38,8 +38,9 @@ final class FamilyStructure extends Structure {
     List<List<Structure>> structures = new ArrayList<>();
     for (Collection<String> set : sets) {
       List<Structure> members = new ArrayList<>();
-      for (String name : Check.notNull(set, kind + ": set " + (structures.size() + 1))) {
-        members.add(component(Check.name(name, kind)));
+      String where = kind + ": set " + (structures.size() + 1);
+      for (String name : Check.notNull(set, where)) {
+        members.add(new ComponentStructure(Check.name(name, where, members.size() + 1)));
       }
       structures.add(members);
     }

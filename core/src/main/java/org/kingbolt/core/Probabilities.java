@@ -210,6 +210,7 @@ public final class Probabilities implements Serializable {
       }
       if (value == null) {
         inOrder = false;
+        Check.notNull(component, "a name in the list of components");
         value = byName.getOrDefault(component, others);
       }
       if (value == null) {

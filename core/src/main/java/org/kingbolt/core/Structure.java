@@ -4,6 +4,7 @@ import com.google.common.collect.ImmutableList;
 import java.io.InvalidObjectException;
 import java.io.ObjectInputStream;
 import java.io.Serializable;
+import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.Collection;
 import java.util.List;
@@ -627,17 +628,16 @@ public abstract sealed class Structure implements Serializable
 
   private static List<Structure> list(Structure[] parts, String where) {
     Check.notNull(parts, where + ": the list of parts");
-    for (Structure part : parts) {
-      Check.notNull(part, where + ": a part");
-    }
     return Arrays.asList(parts);
   }
 
   private static List<Structure> named(String[] names, String where) {
     Check.notNull(names, where + ": the list of names");
-    return Arrays.stream(names)
-        .map(name -> (Structure) new ComponentStructure(Check.name(name, where)))
-        .toList();
+    List<Structure> named = new ArrayList<>(names.length);
+    for (String name : names) {
+      named.add(new ComponentStructure(Check.name(name, where, named.size() + 1)));
+    }
+    return named;
   }
 
   private static String[] array(List<String> names, String where) {
