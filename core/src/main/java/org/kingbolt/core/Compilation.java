@@ -1,9 +1,7 @@
 package org.kingbolt.core;
 
-import java.util.Arrays;
 import java.util.HashMap;
 import java.util.HashSet;
-import java.util.IdentityHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
@@ -20,23 +18,49 @@ final class Compilation {
 
   static CoherentSystem compile(Structure structure, Budget budget) {
     WorkMeter meter = meter(budget);
-    return new CoherentSystem(structure, within(() -> expression(structure, meter).compose(meter)));
+    return system(structure, new Numbering(structure), meter, Composer::compose);
   }
 
   /** The probability alone, without a diagram of the whole. */
   static Probability reliability(Structure structure, Probabilities p, Budget budget) {
-    List<Probability> values =
-        Check.notNull(p, "probabilities").forComponents(structure.components());
-    double[] working = values.stream().mapToDouble(Probability::working).toArray();
-    double[] failing = values.stream().mapToDouble(Probability::failing).toArray();
+    Numbering numbering = new Numbering(structure);
+    List<String> components = numbering.components();
+    double[] working = new double[components.size()];
+    double[] failing = new double[components.size()];
+    Check.notNull(p, "probabilities").fill(components, working, failing);
     WorkMeter meter =
         Check.notNull(budget, "budget").start("working out the reliability without a diagram");
-    double[] both = within(() -> expression(structure, meter).expect(working, failing, meter));
+    double[] both =
+        within(
+            () -> {
+              Composer composer = new Composer();
+              int root = express(numbering, composer, meter);
+              return composer.expect(root, working, failing, meter);
+            });
     return Probability.computed(both[0], both[1]);
   }
 
   static int widestFrontier(Structure structure) {
-    return expression(structure, WorkMeter.UNLIMITED).composer.widestFrontier();
+    Composer composer = new Composer();
+    express(new Numbering(structure), composer, WorkMeter.UNLIMITED);
+    return composer.widestFrontier();
+  }
+
+  /** How an expression becomes a diagram. */
+  private interface Step {
+    Diagram compose(Composer composer, int root, WorkMeter meter);
+  }
+
+  private static CoherentSystem system(
+      Structure structure, Numbering numbering, WorkMeter meter, Step step) {
+    Diagram diagram =
+        within(
+            () -> {
+              Composer composer = new Composer();
+              int root = express(numbering, composer, meter);
+              return step.compose(composer, root, meter);
+            });
+    return new CoherentSystem(structure, numbering.components(), diagram);
   }
 
   private static <T> T within(Supplier<T> work) {
@@ -48,7 +72,8 @@ final class Compilation {
   }
 
   static CoherentSystem compile(Structure structure, List<String> order, Budget budget) {
-    List<String> components = structure.components();
+    Numbering numbering = new Numbering(structure);
+    List<String> components = numbering.components();
     Map<String, Integer> numbers = numbers(components);
     Set<String> rest = new HashSet<>(components);
     int[] variables = new int[components.size()];
@@ -72,9 +97,11 @@ final class Compilation {
               + Check.listed(components.stream().filter(rest::contains).toList())
               + "; name every component once");
     }
-    WorkMeter meter = meter(budget);
-    return new CoherentSystem(
-        structure, within(() -> expression(structure, meter).compose(variables, meter)));
+    return system(
+        structure,
+        numbering,
+        meter(budget),
+        (composer, root, meter) -> composer.compose(root, variables, meter));
   }
 
   private static WorkMeter meter(Budget budget) {
@@ -89,74 +116,21 @@ final class Compilation {
     return numbers;
   }
 
-  /** A structure as an expression of a composer. */
-  private record Expression(Composer composer, int root) {
-
-    Diagram compose(WorkMeter meter) {
-      return composer.compose(root, meter);
-    }
-
-    Diagram compose(int[] order, WorkMeter meter) {
-      return composer.compose(root, order, meter);
-    }
-
-    double[] expect(double[] working, double[] failing, WorkMeter meter) {
-      return composer.expect(root, working, failing, meter);
-    }
-  }
-
-  /** An operator over expressions: equal sub-structures, part by part, have equal shapes. */
-  private static final class Shape {
-    private final Structure operator;
-    private final int[] slots;
-
-    Shape(Structure operator, int[] slots) {
-      this.operator = operator;
-      this.slots = slots;
-    }
-
-    @Override
-    public boolean equals(Object other) {
-      return other instanceof Shape that
-          && Arrays.equals(slots, that.slots)
-          && operator.sameOperator(that.operator);
-    }
-
-    @Override
-    public int hashCode() {
-      return operator.hashCode();
-    }
-  }
-
-  /** Equal sub-structures become one expression. */
-  private static Expression expression(Structure structure, WorkMeter meter) {
-    Map<String, Integer> numbers = numbers(structure.components());
-    Composer composer = new Composer(numbers.size());
-    IdentityHashMap<Structure, Integer> made = new IdentityHashMap<>();
-    Map<Shape, Integer> byShape = new HashMap<>();
-    int root = -1;
-    for (Structure part : Fold.postOrder(structure)) {
-      int[] slots = new int[part.parts().size()];
-      for (int i = 0; i < slots.length; i++) {
-        slots[i] = made.getOrDefault(part.parts().get(i), -1);
+  /** Adds a structure to a composer, with its components in order as variables. */
+  private static int express(Numbering numbering, Composer composer, WorkMeter meter) {
+    int[] made = new int[numbering.size()];
+    for (int number = 0; number < made.length; number++) {
+      Structure part = numbering.structure(number);
+      if (part instanceof ComponentStructure) {
+        made[number] = composer.variable();
+      } else {
+        int[] slots = new int[part.parts().size()];
+        for (int slot = 0; slot < slots.length; slot++) {
+          slots[slot] = made[numbering.part(number, slot)];
+        }
+        made[number] = part.express(composer, slots, meter);
       }
-      Shape shape = new Shape(part, slots);
-      Integer known = byShape.get(shape);
-      root = known != null ? known : add(composer, part, numbers, slots, meter);
-      byShape.put(shape, root);
-      made.put(part, root);
     }
-    return new Expression(composer, root);
-  }
-
-  private static int add(
-      Composer composer,
-      Structure part,
-      Map<String, Integer> numbers,
-      int[] slots,
-      WorkMeter meter) {
-    return part instanceof ComponentStructure component
-        ? composer.variable(numbers.getOrDefault(component.name(), -1))
-        : part.express(composer, slots, meter);
+    return made[made.length - 1];
   }
 }

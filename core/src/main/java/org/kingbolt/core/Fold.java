@@ -7,7 +7,6 @@ import java.util.Deque;
 import java.util.IdentityHashMap;
 import java.util.LinkedHashSet;
 import java.util.List;
-import java.util.Map;
 import java.util.Set;
 
 /**
@@ -130,7 +129,8 @@ final class Fold {
   }
 
   /** The one that stands for all structures that must be equal to a structure. */
-  private static Structure representative(Map<Structure, Structure> equalTo, Structure structure) {
+  private static Structure representative(
+      IdentityHashMap<Structure, Structure> equalTo, Structure structure) {
     Structure at = structure;
     Structure next = equalTo.get(at);
     while (next != null) {
