@@ -17,8 +17,10 @@ final class Compilation {
   private Compilation() {}
 
   static CoherentSystem compile(Structure structure, Budget budget) {
+    Numbering numbering = new Numbering(structure);
     WorkMeter meter = meter(budget);
-    return system(structure, new Numbering(structure), meter, Composer::compose);
+    Diagram diagram = within(() -> expression(numbering, meter).compose(meter));
+    return new CoherentSystem(structure, numbering.components(), diagram);
   }
 
   /** The probability alone, without a diagram of the whole. */
@@ -30,37 +32,12 @@ final class Compilation {
     Check.notNull(p, "probabilities").fill(components, working, failing);
     WorkMeter meter =
         Check.notNull(budget, "budget").start("working out the reliability without a diagram");
-    double[] both =
-        within(
-            () -> {
-              Composer composer = new Composer();
-              int root = express(numbering, composer, meter);
-              return composer.expect(root, working, failing, meter);
-            });
+    double[] both = within(() -> expression(numbering, meter).expect(working, failing, meter));
     return Probability.computed(both[0], both[1]);
   }
 
   static int widestFrontier(Structure structure) {
-    Composer composer = new Composer();
-    express(new Numbering(structure), composer, WorkMeter.UNLIMITED);
-    return composer.widestFrontier();
-  }
-
-  /** How an expression becomes a diagram. */
-  private interface Step {
-    Diagram compose(Composer composer, int root, WorkMeter meter);
-  }
-
-  private static CoherentSystem system(
-      Structure structure, Numbering numbering, WorkMeter meter, Step step) {
-    Diagram diagram =
-        within(
-            () -> {
-              Composer composer = new Composer();
-              int root = express(numbering, composer, meter);
-              return step.compose(composer, root, meter);
-            });
-    return new CoherentSystem(structure, numbering.components(), diagram);
+    return expression(new Numbering(structure), WorkMeter.UNLIMITED).composer.widestFrontier();
   }
 
   private static <T> T within(Supplier<T> work) {
@@ -97,11 +74,9 @@ final class Compilation {
               + Check.listed(components.stream().filter(rest::contains).toList())
               + "; name every component once");
     }
-    return system(
-        structure,
-        numbering,
-        meter(budget),
-        (composer, root, meter) -> composer.compose(root, variables, meter));
+    WorkMeter meter = meter(budget);
+    Diagram diagram = within(() -> expression(numbering, meter).compose(variables, meter));
+    return new CoherentSystem(structure, numbering.components(), diagram);
   }
 
   private static WorkMeter meter(Budget budget) {
@@ -116,13 +91,30 @@ final class Compilation {
     return numbers;
   }
 
-  /** Adds a structure to a composer, with its components in order as variables. */
-  private static int express(Numbering numbering, Composer composer, WorkMeter meter) {
+  /** A structure as an expression of a composer, whose variables are the components in order. */
+  private record Expression(Composer composer, int root) {
+
+    Diagram compose(WorkMeter meter) {
+      return composer.compose(root, meter);
+    }
+
+    Diagram compose(int[] order, WorkMeter meter) {
+      return composer.compose(root, order, meter);
+    }
+
+    double[] expect(double[] working, double[] failing, WorkMeter meter) {
+      return composer.expect(root, working, failing, meter);
+    }
+  }
+
+  private static Expression expression(Numbering numbering, WorkMeter meter) {
+    Composer composer = new Composer(0);
     int[] made = new int[numbering.size()];
+    int components = 0;
     for (int number = 0; number < made.length; number++) {
       Structure part = numbering.structure(number);
       if (part instanceof ComponentStructure) {
-        made[number] = composer.variable();
+        made[number] = composer.variable(components++);
       } else {
         int[] slots = new int[part.parts().size()];
         for (int slot = 0; slot < slots.length; slot++) {
@@ -131,6 +123,6 @@ final class Compilation {
         made[number] = part.express(composer, slots, meter);
       }
     }
-    return made[made.length - 1];
+    return new Expression(composer, made[made.length - 1]);
   }
 }

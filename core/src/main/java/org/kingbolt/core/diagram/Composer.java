@@ -20,6 +20,10 @@ public final class Composer {
   private static final int[] NO_PARTS = {};
 
   private int variables;
+
+  /** Leaf of each variable, or -1. */
+  private int[] leaf;
+
   private int count;
   private int widest;
 
@@ -36,16 +40,34 @@ public final class Composer {
   private int[] pool = new int[64];
   private int pooled;
 
-  /** Starts an expression. */
-  public Composer() {}
+  /**
+   * Starts an expression.
+   *
+   * @param variables the number of variables, as far as it is known
+   */
+  public Composer(int variables) {
+    this.variables = variables;
+    this.leaf = new int[Math.max(16, variables)];
+    Arrays.fill(leaf, -1);
+  }
 
   /**
-   * Adds the leaf of the next variable.
+   * Finds or adds the leaf of a variable.
    *
-   * @return the expression's number; variables are numbered from 0 in order of their leaves
+   * @param number the variable's number, from 0
+   * @return the expression's number
    */
-  public int variable() {
-    return add(variables++, LEAF, NO_PARTS);
+  public int variable(int number) {
+    if (number >= leaf.length) {
+      int known = leaf.length;
+      leaf = Arrays.copyOf(leaf, Math.max(known << 1, number + 1));
+      Arrays.fill(leaf, known, leaf.length, -1);
+    }
+    if (leaf[number] < 0) {
+      leaf[number] = add(number, LEAF, NO_PARTS);
+      variables = Math.max(variables, number + 1);
+    }
+    return leaf[number];
   }
 
   /**

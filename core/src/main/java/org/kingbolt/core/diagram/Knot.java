@@ -16,7 +16,7 @@ final class Knot {
   private final int[] place;
 
   /** The knot over its units as variables. */
-  final Composer composer = new Composer();
+  final Composer composer = new Composer(0);
 
   final int root;
 
@@ -117,6 +117,6 @@ final class Knot {
       units = Arrays.copyOf(units, units.length << 1);
     }
     units[composer.variables()] = expression;
-    return composer.variable();
+    return composer.variable(composer.variables());
   }
 }
