@@ -7,7 +7,6 @@ import java.util.Deque;
 import java.util.IdentityHashMap;
 import java.util.LinkedHashSet;
 import java.util.List;
-import java.util.Map;
 import java.util.Set;
 
 /**
@@ -95,7 +94,7 @@ final class Fold {
     if (!alike(left, right) || left.parts().isEmpty()) {
       return alike(left, right);
     }
-    Map<Structure, Structure> equalTo = new IdentityHashMap<>();
+    IdentityHashMap<Structure, Structure> equalTo = new IdentityHashMap<>();
     Deque<Pair> open = new ArrayDeque<>();
     open.push(new Pair(left, right));
     while (!open.isEmpty()) {
@@ -130,7 +129,8 @@ final class Fold {
   }
 
   /** The one that stands for all structures that must be equal to a structure. */
-  private static Structure representative(Map<Structure, Structure> equalTo, Structure structure) {
+  private static Structure representative(
+      IdentityHashMap<Structure, Structure> equalTo, Structure structure) {
     Structure at = structure;
     Structure next = equalTo.get(at);
     while (next != null) {

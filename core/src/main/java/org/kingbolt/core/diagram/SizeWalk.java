@@ -75,7 +75,7 @@ final class SizeWalk implements SetWalk {
 
   /** Makes the planes that a walk over the sets of a size looks at. */
   private void makePlanes(int wanted) {
-    while (places > 0 && planes.size() <= wanted - smallest[nodes.root()] >> 6) {
+    while (places > 0 && planes.size() <= (wanted - smallest[nodes.root()]) >> 6) {
       grow((long) Long.BYTES * places);
       long[] plane = new long[places];
       for (int id = 2; id < nodes.size(); id++) {
