@@ -115,7 +115,7 @@ class NetworkReducerTest {
     }
     Evaluation whole =
         Evaluation.of(FrontierSweep.template(network, WorkMeter.UNLIMITED), works, fails);
-    Composer composer = new Composer();
+    Composer composer = new Composer(slots);
     int root = composer.network(network, false, leaves(composer, slots), WorkMeter.UNLIMITED);
     double[] direct = composer.expect(root, works, fails, WorkMeter.UNLIMITED);
     assertClose(whole.works(), direct[0]);
@@ -124,7 +124,7 @@ class NetworkReducerTest {
     Evaluation composed = Evaluation.of(diagram, works, fails);
     assertClose(whole.works(), composed.works());
     assertClose(whole.fails(), composed.fails());
-    Composer dualComposer = new Composer();
+    Composer dualComposer = new Composer(slots);
     int dual = dualComposer.network(network, true, leaves(dualComposer, slots), held -> {});
     double[] mirrored = dualComposer.expect(dual, fails, works, WorkMeter.UNLIMITED);
     assertClose(whole.works(), mirrored[1]);
@@ -145,7 +145,7 @@ class NetworkReducerTest {
   private static int[] leaves(Composer composer, int slots) {
     int[] leaves = new int[slots];
     for (int i = 0; i < slots; i++) {
-      leaves[i] = composer.variable();
+      leaves[i] = composer.variable(i);
     }
     return leaves;
   }
@@ -184,7 +184,7 @@ class NetworkReducerTest {
             nodeSlot,
             0,
             target);
-    Composer composer = new Composer();
+    Composer composer = new Composer(count);
     int root = composer.network(network, false, leaves(composer, count), WorkMeter.UNLIMITED);
     assertTrue(composer.widestFrontier() <= 5, () -> "width " + composer.widestFrontier());
     double[] works = new double[count];
@@ -193,7 +193,7 @@ class NetworkReducerTest {
     java.util.Arrays.fill(fails, 0.1);
     // K5 between two of its nodes, then the bridge of five such links: Colbourn 1987 and Barlow and
     // Proschan 1975 (formulas from memory)
-    Composer small = new Composer();
+    Composer small = new Composer(10);
     double p = small.expect(clique(small), works, fails, WorkMeter.UNLIMITED)[0];
     double bridge = 2 * p * p + 2 * p * p * p - 5 * Math.pow(p, 4) + 2 * Math.pow(p, 5);
     double[] direct = composer.expect(root, works, fails, WorkMeter.UNLIMITED);
