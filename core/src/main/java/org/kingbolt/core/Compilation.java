@@ -17,27 +17,29 @@ final class Compilation {
   private Compilation() {}
 
   static CoherentSystem compile(Structure structure, Budget budget) {
-    Numbering numbering = new Numbering(structure);
     WorkMeter meter = meter(budget);
+    Numbering numbering = new Numbering(structure, meter);
     Diagram diagram = within(() -> expression(numbering, meter).compose(meter));
     return new CoherentSystem(structure, numbering.components(), diagram);
   }
 
   /** The probability alone, without a diagram of the whole. */
   static Probability reliability(Structure structure, Probabilities p, Budget budget) {
-    Numbering numbering = new Numbering(structure);
+    Check.notNull(p, "probabilities");
+    WorkMeter meter =
+        Check.notNull(budget, "budget").start("working out the reliability without a diagram");
+    Numbering numbering = new Numbering(structure, meter);
     List<String> components = numbering.components();
     double[] working = new double[components.size()];
     double[] failing = new double[components.size()];
-    Check.notNull(p, "probabilities").fill(components, working, failing);
-    WorkMeter meter =
-        Check.notNull(budget, "budget").start("working out the reliability without a diagram");
+    p.fill(components, working, failing);
     double[] both = within(() -> expression(numbering, meter).expect(working, failing, meter));
     return Probability.computed(both[0], both[1]);
   }
 
   static int widestFrontier(Structure structure) {
-    return expression(new Numbering(structure), WorkMeter.UNLIMITED).composer.widestFrontier();
+    WorkMeter meter = WorkMeter.UNLIMITED;
+    return expression(new Numbering(structure, meter), meter).composer.widestFrontier();
   }
 
   private static <T> T within(Supplier<T> work) {
@@ -49,7 +51,8 @@ final class Compilation {
   }
 
   static CoherentSystem compile(Structure structure, List<String> order, Budget budget) {
-    Numbering numbering = new Numbering(structure);
+    WorkMeter meter = meter(budget);
+    Numbering numbering = new Numbering(structure, meter);
     List<String> components = numbering.components();
     Map<String, Integer> numbers = numbers(components);
     Set<String> rest = new HashSet<>(components);
@@ -74,7 +77,6 @@ final class Compilation {
               + Check.listed(components.stream().filter(rest::contains).toList())
               + "; name every component once");
     }
-    WorkMeter meter = meter(budget);
     Diagram diagram = within(() -> expression(numbering, meter).compose(variables, meter));
     return new CoherentSystem(structure, numbering.components(), diagram);
   }

@@ -54,11 +54,29 @@ public final class Derivation {
 
   private Derivation(Structure structure, WorkMeter meter) {
     Runnable pause = () -> meter.now(steps.size());
+    // steps are counted by the caller's meter, and what they hold by another one
+    WorkMeter heap = Budget.ofHeap().start("deriving the formula");
+    long held = 0;
+    int measured = 0;
     stepFor(structure, List.of());
     for (int next = 0; next < steps.size(); next++) {
+      for (; measured < steps.size(); measured++) {
+        held += size(steps.get(measured));
+        heap.at(held);
+      }
       pause.run();
       derive(steps.get(next), pause);
     }
+  }
+
+  /** What a step holds at most, in nodes of the meter. */
+  private static long size(Step step) {
+    long size = 1L + step.condition.length() / WorkMeter.BYTES_PER_NODE;
+    for (Structure part : Fold.postOrder(step.structure)) {
+      int slots = part.parts().size();
+      size += slots == 0 ? 0 : 1 + (part instanceof NetworkStructure ? 2 * slots : slots / 8);
+    }
+    return size;
   }
 
   /**

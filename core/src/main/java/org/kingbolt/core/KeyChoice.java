@@ -3,8 +3,8 @@ package org.kingbolt.core;
 import java.util.ArrayList;
 import java.util.Comparator;
 import java.util.List;
-import java.util.Optional;
 import java.util.Set;
+import org.jspecify.annotations.Nullable;
 
 /**
  * The key on which to condition a structure that does not fall apart by itself, and what is left on
@@ -15,6 +15,11 @@ final class KeyChoice {
 
   /** More candidates than this are thinned out evenly. */
   private static final int MOST_TRIED = 48;
+
+  private static final Comparator<KeyChoice> ORDER =
+      Comparator.comparingInt((KeyChoice choice) -> choice.sum(Decomposition.Measure::unresolved))
+          .thenComparingInt(choice -> choice.sum(Decomposition.Measure::symbols))
+          .thenComparingInt(choice -> choice.sum(Decomposition.Measure::depth));
 
   /** The key: a component, or a part that shares nothing with the other parts. */
   final Structure key;
@@ -43,7 +48,7 @@ final class KeyChoice {
    */
   static KeyChoice best(Structure structure, Runnable pause) {
     Set<String> repeated = Decomposition.repeated(structure);
-    List<KeyChoice> tried = new ArrayList<>();
+    KeyChoice best = null;
     if (repeated.isEmpty()) {
       List<Structure> parts = structure.parts();
       boolean alike = structure instanceof GateStructure;
@@ -51,7 +56,7 @@ final class KeyChoice {
       int stride = (parts.size() + most - 1) / most;
       for (int i = 0; i < parts.size(); i += stride) {
         pause.run();
-        tried.add(onPart(structure, i, pause));
+        best = better(best, onPart(structure, i, pause));
       }
     } else {
       List<String> names = List.copyOf(repeated);
@@ -59,20 +64,25 @@ final class KeyChoice {
       for (int i = 0; i < names.size(); i += stride) {
         String name = names.get(i);
         pause.run();
-        tried.add(
-            new KeyChoice(
-                Structure.component(name),
-                structure.givenWorking(name),
-                structure.givenFailed(name),
-                pause));
+        best =
+            better(
+                best,
+                new KeyChoice(
+                    Structure.component(name),
+                    structure.givenWorking(name),
+                    structure.givenFailed(name),
+                    pause));
       }
     }
-    Comparator<KeyChoice> order =
-        Comparator.comparingInt((KeyChoice choice) -> choice.sum(Decomposition.Measure::unresolved))
-            .thenComparingInt(choice -> choice.sum(Decomposition.Measure::symbols))
-            .thenComparingInt(choice -> choice.sum(Decomposition.Measure::depth));
-    Optional<KeyChoice> best = tried.stream().min(order);
-    return best.orElseThrow(() -> new AssertionError("no key for " + structure));
+    if (best == null) {
+      throw new AssertionError("no key for " + structure);
+    }
+    return best;
+  }
+
+  /** The first of the best. */
+  private static KeyChoice better(@Nullable KeyChoice best, KeyChoice next) {
+    return best == null || ORDER.compare(next, best) < 0 ? next : best;
   }
 
   private static KeyChoice onPart(Structure structure, int part, Runnable pause) {

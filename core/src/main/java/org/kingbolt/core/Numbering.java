@@ -4,6 +4,7 @@ import com.google.common.collect.ImmutableList;
 import java.util.Arrays;
 import java.util.IdentityHashMap;
 import java.util.List;
+import org.kingbolt.core.diagram.WorkMeter;
 
 /**
  * The distinct sub-structures of a structure, numbered from 0, parts before wholes and the root
@@ -35,7 +36,11 @@ final class Numbering {
   private int[] found = new int[64];
   private int foundCount;
 
-  Numbering(Structure root) {
+  private final WorkMeter meter;
+
+  /** Walks over a structure; the meter hears of every distinct sub-structure. */
+  Numbering(Structure root, WorkMeter meter) {
+    this.meter = meter;
     arrive(root);
     while (depth > 0) {
       Structure operator = open[depth - 1];
@@ -136,6 +141,7 @@ final class Numbering {
   }
 
   private int add(Structure structure, int operands, int at) {
+    meter.at(count);
     int from = count == 0 ? 0 : end[count - 1];
     if (count == structures.length) {
       structures = Arrays.copyOf(structures, count << 1);

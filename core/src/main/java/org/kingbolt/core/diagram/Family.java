@@ -46,8 +46,8 @@ final class Family extends Operator {
 
   @Override
   Diagram make(WorkMeter meter) {
+    List<BitSet> placed = placed(meter);
     NodeTable table = new NodeTable(order.length, meter);
-    List<BitSet> placed = placed();
     int[] made = new int[placed.size()];
     for (int i = 0; i < made.length; i++) {
       int id = paths ? Diagram.WORKS : Diagram.FAILS;
@@ -74,16 +74,19 @@ final class Family extends Operator {
   }
 
   /** The sets in terms of levels, those that begin first in front. */
-  private List<BitSet> placed() {
+  private List<BitSet> placed(WorkMeter meter) {
     int[] place = new int[order.length];
     for (int i = 0; i < order.length; i++) {
       place[order[i]] = i;
     }
     List<BitSet> placed = new ArrayList<>();
+    long held = 0;
     for (BitSet set : sets) {
       BitSet moved = new BitSet();
       set.stream().forEach(slot -> moved.set(place[slot]));
       placed.add(moved);
+      held += 1 + moved.size() / Byte.SIZE / WorkMeter.BYTES_PER_NODE;
+      meter.at(held);
     }
     placed.sort(Comparator.comparingInt((BitSet set) -> set.nextSetBit(0)));
     return placed;

@@ -59,6 +59,10 @@ final class OrderSearch {
    */
   static Diagram smallest(Knot knot, double[] sizes, WorkMeter meter) {
     OrderSearch search = new OrderSearch(knot, sizes, meter);
+    for (int expression = 0; expression < knot.composer.count(); expression++) {
+      // once for all orders, and not within their limits
+      knot.composer.operatorOf(expression).template(meter);
+    }
     if (search.hasChoice()) {
       search.run();
     } else {

@@ -51,8 +51,7 @@ public final class StateCounts {
       for (int id = diagram.from(level); id < diagram.to(level); id++) {
         meter.now(id * nodesPerNumber);
         BigInteger low = free(count[diagram.low(id)], levelOf[diagram.low(id)] - level - 1);
-        BigInteger high =
-            free(count[diagram.high(id)], levelOf[diagram.high(id)] - level - 1);
+        BigInteger high = free(count[diagram.high(id)], levelOf[diagram.high(id)] - level - 1);
         count[id] = low.add(high.shiftLeft(block));
       }
     }
