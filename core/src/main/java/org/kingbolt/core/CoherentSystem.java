@@ -39,9 +39,9 @@ public final class CoherentSystem implements Serializable {
   private final transient Diagram diagram;
 
   /** Variables of the diagram are indices into the structure's components. */
-  CoherentSystem(Structure structure, Diagram diagram) {
+  CoherentSystem(Structure structure, ImmutableList<String> components, Diagram diagram) {
     this.structure = structure;
-    this.components = ImmutableList.copyOf(structure.components());
+    this.components = components;
     this.diagram = diagram;
   }
 
@@ -153,7 +153,8 @@ public final class CoherentSystem implements Serializable {
     reduced.components().forEach(name -> places.put(name, places.size()));
     int[] numbers = components.stream().mapToInt(name -> places.getOrDefault(name, -1)).toArray();
     WorkMeter meter = Budget.ofHeap().start("conditioning on a component");
-    return new CoherentSystem(reduced, diagram.holding(index, works, meter).renumbered(numbers));
+    Diagram held = diagram.holding(index, works, meter).renumbered(numbers);
+    return new CoherentSystem(reduced, ImmutableList.copyOf(reduced.components()), held);
   }
 
   /**

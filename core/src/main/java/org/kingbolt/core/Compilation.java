@@ -1,9 +1,7 @@
 package org.kingbolt.core;
 
-import java.util.Arrays;
 import java.util.HashMap;
 import java.util.HashSet;
-import java.util.IdentityHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Set;
@@ -19,24 +17,27 @@ final class Compilation {
   private Compilation() {}
 
   static CoherentSystem compile(Structure structure, Budget budget) {
+    Numbering numbering = new Numbering(structure);
     WorkMeter meter = meter(budget);
-    return new CoherentSystem(structure, within(() -> expression(structure, meter).compose(meter)));
+    Diagram diagram = within(() -> expression(numbering, meter).compose(meter));
+    return new CoherentSystem(structure, numbering.components(), diagram);
   }
 
   /** The probability alone, without a diagram of the whole. */
   static Probability reliability(Structure structure, Probabilities p, Budget budget) {
-    List<Probability> values =
-        Check.notNull(p, "probabilities").forComponents(structure.components());
-    double[] working = values.stream().mapToDouble(Probability::working).toArray();
-    double[] failing = values.stream().mapToDouble(Probability::failing).toArray();
+    Numbering numbering = new Numbering(structure);
+    List<String> components = numbering.components();
+    double[] working = new double[components.size()];
+    double[] failing = new double[components.size()];
+    Check.notNull(p, "probabilities").fill(components, working, failing);
     WorkMeter meter =
         Check.notNull(budget, "budget").start("working out the reliability without a diagram");
-    double[] both = within(() -> expression(structure, meter).expect(working, failing, meter));
+    double[] both = within(() -> expression(numbering, meter).expect(working, failing, meter));
     return Probability.computed(both[0], both[1]);
   }
 
   static int widestFrontier(Structure structure) {
-    return expression(structure, WorkMeter.UNLIMITED).composer.widestFrontier();
+    return expression(new Numbering(structure), WorkMeter.UNLIMITED).composer.widestFrontier();
   }
 
   private static <T> T within(Supplier<T> work) {
@@ -48,7 +49,8 @@ final class Compilation {
   }
 
   static CoherentSystem compile(Structure structure, List<String> order, Budget budget) {
-    List<String> components = structure.components();
+    Numbering numbering = new Numbering(structure);
+    List<String> components = numbering.components();
     Map<String, Integer> numbers = numbers(components);
     Set<String> rest = new HashSet<>(components);
     int[] variables = new int[components.size()];
@@ -73,8 +75,8 @@ final class Compilation {
               + "; name every component once");
     }
     WorkMeter meter = meter(budget);
-    return new CoherentSystem(
-        structure, within(() -> expression(structure, meter).compose(variables, meter)));
+    Diagram diagram = within(() -> expression(numbering, meter).compose(variables, meter));
+    return new CoherentSystem(structure, numbering.components(), diagram);
   }
 
   private static WorkMeter meter(Budget budget) {
@@ -89,7 +91,7 @@ final class Compilation {
     return numbers;
   }
 
-  /** A structure as an expression of a composer. */
+  /** A structure as an expression of a composer, whose variables are the components in order. */
   private record Expression(Composer composer, int root) {
 
     Diagram compose(WorkMeter meter) {
@@ -105,58 +107,22 @@ final class Compilation {
     }
   }
 
-  /** An operator over expressions: equal sub-structures, part by part, have equal shapes. */
-  private static final class Shape {
-    private final Structure operator;
-    private final int[] slots;
-
-    Shape(Structure operator, int[] slots) {
-      this.operator = operator;
-      this.slots = slots;
-    }
-
-    @Override
-    public boolean equals(Object other) {
-      return other instanceof Shape that
-          && Arrays.equals(slots, that.slots)
-          && operator.sameOperator(that.operator);
-    }
-
-    @Override
-    public int hashCode() {
-      return operator.hashCode();
-    }
-  }
-
-  /** Equal sub-structures become one expression. */
-  private static Expression expression(Structure structure, WorkMeter meter) {
-    Map<String, Integer> numbers = numbers(structure.components());
-    Composer composer = new Composer(numbers.size());
-    IdentityHashMap<Structure, Integer> made = new IdentityHashMap<>();
-    Map<Shape, Integer> byShape = new HashMap<>();
-    int root = -1;
-    for (Structure part : Fold.postOrder(structure)) {
-      int[] slots = new int[part.parts().size()];
-      for (int i = 0; i < slots.length; i++) {
-        slots[i] = made.getOrDefault(part.parts().get(i), -1);
+  private static Expression expression(Numbering numbering, WorkMeter meter) {
+    Composer composer = new Composer(0);
+    int[] made = new int[numbering.size()];
+    int components = 0;
+    for (int number = 0; number < made.length; number++) {
+      Structure part = numbering.structure(number);
+      if (part instanceof ComponentStructure) {
+        made[number] = composer.variable(components++);
+      } else {
+        int[] slots = new int[part.parts().size()];
+        for (int slot = 0; slot < slots.length; slot++) {
+          slots[slot] = made[numbering.part(number, slot)];
+        }
+        made[number] = part.express(composer, slots, meter);
       }
-      Shape shape = new Shape(part, slots);
-      Integer known = byShape.get(shape);
-      root = known != null ? known : add(composer, part, numbers, slots, meter);
-      byShape.put(shape, root);
-      made.put(part, root);
     }
-    return new Expression(composer, root);
-  }
-
-  private static int add(
-      Composer composer,
-      Structure part,
-      Map<String, Integer> numbers,
-      int[] slots,
-      WorkMeter meter) {
-    return part instanceof ComponentStructure component
-        ? composer.variable(numbers.getOrDefault(component.name(), -1))
-        : part.express(composer, slots, meter);
+    return new Expression(composer, made[made.length - 1]);
   }
 }

@@ -188,7 +188,7 @@ final class FamilyStructure extends Structure {
 
   @Override
   int express(Composer composer, int[] partExpressions, WorkMeter meter) {
-    return composer.operator(Templates.family(parts().size(), sets, paths, meter), partExpressions);
+    return composer.operator(Templates.family(parts().size(), sets, paths), partExpressions);
   }
 
   @Override

@@ -201,6 +201,7 @@ public final class Probabilities implements Serializable {
     Iterator<Map.Entry<String, Probability>> listed = byName.entrySet().iterator();
     boolean inOrder = true;
     for (String component : components) {
+      Check.notNull(component, "a name in the list of components");
       Probability value = null;
       if (inOrder && listed.hasNext()) {
         // registers often list the components in this very order, which spares a look-up

@@ -1,10 +1,7 @@
 package org.kingbolt.core.diagram;
 
-import java.util.ArrayList;
 import java.util.Arrays;
-import java.util.List;
-import java.util.Objects;
-import org.jspecify.annotations.Nullable;
+import java.util.function.IntUnaryOperator;
 
 /**
  * Puts templates together: an expression of operators over variables becomes one reduced diagram.
@@ -19,36 +16,58 @@ import org.jspecify.annotations.Nullable;
  */
 public final class Composer {
 
-  /** What each operator does; nothing for a leaf. */
-  private final List<@Nullable Operator> operators = new ArrayList<>();
-
-  private final List<int[]> parts = new ArrayList<>();
+  private static final Operator LEAF = Operator.of(Diagram.constant(false));
   private static final int[] NO_PARTS = {};
 
-  private final int variables;
+  private int variables;
+
+  /** Leaf of each variable, or -1. */
+  private int[] leaf;
+
   private int count;
   private int widest;
+
+  /** What each operator does. */
+  private Operator[] operators = new Operator[16];
 
   /** Variable of a leaf, or -1 for an operator. */
   private int[] variable = new int[16];
 
+  /** Where in the pool the parts of an expression begin, and how many there are. */
+  private int[] firstPart = new int[16];
+
+  private int[] partCount = new int[16];
+  private int[] pool = new int[64];
+  private int pooled;
+
   /**
    * Starts an expression.
    *
-   * @param variables the number of variables
+   * @param variables the number of variables, as far as it is known
    */
   public Composer(int variables) {
     this.variables = variables;
+    this.leaf = new int[Math.max(16, variables)];
+    Arrays.fill(leaf, -1);
   }
 
   /**
-   * Adds a leaf.
+   * Finds or adds the leaf of a variable.
    *
-   * @param number the variable's number, from 0 to {@code variables - 1}
+   * @param number the variable's number, from 0
    * @return the expression's number
    */
   public int variable(int number) {
-    return add(number, null, NO_PARTS);
+    if (number >= leaf.length) {
+      int known = leaf.length;
+      leaf = Arrays.copyOf(leaf, Math.max(known << 1, number + 1));
+      Arrays.fill(leaf, known, leaf.length, -1);
+    }
+    if (leaf[number] < 0) {
+      leaf[number] = add(number, LEAF, NO_PARTS);
+      variables = Math.max(variables, number + 1);
+    }
+    return leaf[number];
   }
 
   /**
@@ -108,14 +127,28 @@ public final class Composer {
         : operator(Templates.atLeast(1, slotParts.length), slotParts);
   }
 
-  private int add(int number, @Nullable Operator operator, int[] slotParts) {
+  private int add(int number, Operator operator, int[] slotParts) {
     if (count == variable.length) {
+      operators = Arrays.copyOf(operators, count << 1);
       variable = Arrays.copyOf(variable, count << 1);
+      firstPart = Arrays.copyOf(firstPart, count << 1);
+      partCount = Arrays.copyOf(partCount, count << 1);
     }
     variable[count] = number;
-    operators.add(operator);
-    parts.add(slotParts);
+    replace(count, operator, slotParts);
     return count++;
+  }
+
+  /** Puts another operator over other parts in the place of an equal expression. */
+  void replace(int expression, Operator operator, int[] slotParts) {
+    if (pool.length - pooled < slotParts.length) {
+      pool = Arrays.copyOf(pool, Math.max(pool.length << 1, pooled + slotParts.length));
+    }
+    System.arraycopy(slotParts, 0, pool, pooled, slotParts.length);
+    operators[expression] = operator;
+    firstPart[expression] = pooled;
+    partCount[expression] = slotParts.length;
+    pooled += slotParts.length;
   }
 
   boolean isLeaf(int expression) {
@@ -128,21 +161,78 @@ public final class Composer {
 
   /** What an operator does. */
   Operator operatorOf(int expression) {
-    return Objects.requireNonNull(operators.get(expression), "a leaf");
+    return operators[expression];
   }
 
+  /** The number of levels of an operator's template; 0 for a leaf. */
   int levels(int expression) {
-    return operatorOf(expression).levels();
+    return operators[expression].levels();
   }
 
   /** The part that an operator reads on a level of its template. */
   int partAt(int expression, int level) {
-    return parts.get(expression)[operatorOf(expression).slotAt(level)];
+    return pool[firstPart[expression] + operators[expression].slotAt(level)];
+  }
+
+  /** The number of slots of an operator. */
+  int slots(int expression) {
+    return partCount[expression];
+  }
+
+  /** The part in a slot of an operator. */
+  int part(int expression, int slot) {
+    return pool[firstPart[expression] + slot];
+  }
+
+  /** How many levels of operators read each expression. */
+  int[] uses() {
+    int[] uses = new int[count];
+    for (int expression = 0; expression < count; expression++) {
+      for (int level = levels(expression) - 1; level >= 0; level--) {
+        uses[partAt(expression, level)]++;
+      }
+    }
+    return uses;
   }
 
   /** The parts of an operator, by slot. */
   int[] parts(int expression) {
-    return parts.get(expression);
+    int first = firstPart[expression];
+    return Arrays.copyOfRange(pool, first, first + partCount[expression]);
+  }
+
+  /** Lets the parts of a gate change places. */
+  void arrange(int gate, int[] slotParts) {
+    System.arraycopy(slotParts, 0, pool, firstPart[gate], slotParts.length);
+  }
+
+  /** The parts of all operators. */
+  int[] arrangement() {
+    return Arrays.copyOf(pool, pooled);
+  }
+
+  /** Puts the parts of all operators back into their places. */
+  void arrange(int[] arrangement) {
+    System.arraycopy(arrangement, 0, pool, 0, pooled);
+  }
+
+  /** The slots of an operator, their parts in increasing order of a key, equal ones as they are. */
+  int[] sortedSlots(int expression, IntUnaryOperator key) {
+    long[] keyed = new long[partCount[expression]];
+    for (int slot = 0; slot < keyed.length; slot++) {
+      keyed[slot] = ((long) key.applyAsInt(part(expression, slot)) << 32) | slot;
+    }
+    Arrays.sort(keyed);
+    return Arrays.stream(keyed).mapToInt(slot -> (int) slot).toArray();
+  }
+
+  /** The parts of an operator in increasing order of a key, equal ones as they are. */
+  int[] sortedParts(int expression, IntUnaryOperator key) {
+    int[] parts = sortedSlots(expression, key);
+    for (int i = 0; i < parts.length; i++) {
+      parts[i] = part(expression, parts[i]);
+    }
+    return parts;
   }
 
   int count() {
@@ -162,7 +252,8 @@ public final class Composer {
    * @return the reduced diagram over all variables; those never used come last in the order
    */
   public Diagram compose(int root, WorkMeter meter) {
-    return new Composition(this, ExpressionOrder.depthFirst(this, root), meter).diagram(root);
+    Untangling.of(this, root, meter);
+    return new Concatenation(this, meter).diagram(root);
   }
 
   /**
@@ -176,7 +267,7 @@ public final class Composer {
    * @return both, each by sums of non-negative terms
    */
   public double[] expect(int root, double[] working, double[] failing, WorkMeter meter) {
-    return new Expectation(this, root, working, failing, meter).result();
+    return Expectation.of(this, root, working, failing, meter);
   }
 
   /**

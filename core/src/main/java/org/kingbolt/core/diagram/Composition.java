@@ -1,10 +1,16 @@
 package org.kingbolt.core.diagram;
 
 import java.util.ArrayDeque;
+import java.util.Arrays;
 import java.util.Deque;
 
 /**
- * One run of a {@link Composer}: the table, the open operators, and the parts built on their own.
+ * One run over an expression whose parts may share variables: the table, the open operators, and
+ * the parts built on their own.
+ *
+ * <p>A leaf that is itself a part of a series gate need not be looked at again inside the other
+ * parts of that gate, which only matter while it works; likewise in a parallel gate, while it has
+ * failed. So it is taken for granted there, in operators that are used nowhere else.
  */
 final class Composition {
 
@@ -39,8 +45,19 @@ final class Composition {
   private final NodeTable table;
   private final WorkMeter meter;
 
-  /** Diagram of each expression built on its own, or 0. */
+  /** Diagram of each expression built on its own, or -1. */
   private final int[] alone;
+
+  private final int[] uses;
+
+  /** Series gates around in which a leaf works, minus parallel gates around in which it failed. */
+  private final int[] granted;
+
+  private final int[] lastPass;
+  private int passes;
+
+  /** Open operators that are used in several places, so that nothing is granted inside them. */
+  private int sharedOpen;
 
   private final Deque<Frame> frames = new ArrayDeque<>();
   private long framesHold;
@@ -51,24 +68,24 @@ final class Composition {
     this.meter = meter;
     this.table = new NodeTable(composer.variables(), held -> meter.at(held + framesHold));
     this.alone = new int[composer.count()];
+    Arrays.fill(alone, -1);
+    this.uses = composer.uses();
+    this.granted = new int[composer.count()];
+    this.lastPass = new int[composer.count()];
   }
 
   Diagram diagram(int root) {
-    return table.diagram(build(root), order.variableAtLevel());
-  }
-
-  /** Builds one expression on its own, beside what has been built before. */
-  int build(int expression) {
-    if (composer.isLeaf(expression)) {
-      return leaf(expression, Diagram.FAILS, Diagram.WORKS);
+    if (composer.isLeaf(root)) {
+      int leaf = leaf(root, Diagram.FAILS, Diagram.WORKS);
+      return table.diagram(leaf, order.variableAtLevel());
     }
-    open(expression, Diagram.FAILS, Diagram.WORKS);
-    return run();
+    open(root, Diagram.FAILS, Diagram.WORKS);
+    return table.diagram(run(), order.variableAtLevel());
   }
 
-  /** The table in which expressions are built. */
-  NodeTable table() {
-    return table;
+  /** The number of nodes made. */
+  int size() {
+    return table.size();
   }
 
   private void open(int expression, int fails, int works) {
@@ -76,6 +93,34 @@ final class Composition {
         new Frame(expression, composer.operatorOf(expression).template(meter), fails, works);
     framesHold += frame.made.length / 8;
     frames.push(frame);
+    sharedOpen += uses[expression] > 1 ? 1 : 0;
+    grant(expression, 1);
+  }
+
+  private void close(Frame frame) {
+    grant(frame.expression, -1);
+    sharedOpen -= uses[frame.expression] > 1 ? 1 : 0;
+    framesHold -= frame.made.length / 8;
+  }
+
+  /** Grants the parts of a gate, each once, or takes that back. */
+  private void grant(int expression, int times) {
+    int sign = sign(expression);
+    passes++;
+    for (int slot = sign == 0 ? -1 : composer.slots(expression) - 1; slot >= 0; slot--) {
+      int part = composer.part(expression, slot);
+      granted[part] += lastPass[part] == passes ? 0 : sign * times;
+      lastPass[part] = passes;
+    }
+  }
+
+  /** 1 for a series gate, -1 for a parallel gate, 0 for others and where nothing is granted. */
+  private int sign(int expression) {
+    boolean grants =
+        sharedOpen == 0
+            && composer.operatorOf(expression) instanceof Threshold gate
+            && gate.isChain();
+    return grants ? ((Threshold) composer.operatorOf(expression)).isSeries() ? 1 : -1 : 0;
   }
 
   private int run() {
@@ -85,7 +130,7 @@ final class Composition {
         continue;
       }
       frames.pop();
-      framesHold -= frame.made.length / 8;
+      close(frame);
       int result = frame.made[frame.template.root()];
       if (frame.alone) {
         alone[frame.expression] = result;
@@ -115,8 +160,9 @@ final class Composition {
       if (fails == works) {
         result = fails;
       } else if (composer.isLeaf(part)) {
-        result = leaf(part, fails, works);
-      } else if (alone[part] != 0) {
+        int sure = sharedOpen > 0 ? 0 : granted[part] - sign(frame.expression);
+        result = sure > 0 ? works : sure < 0 ? fails : leaf(part, fails, works);
+      } else if (alone[part] >= 0) {
         result = table.ifThenElse(alone[part], works, fails);
       } else if (isDirect(part, fails, works)) {
         open(part, fails, works);

@@ -27,6 +27,7 @@ final class ExpressionOrder {
     this.knot = new boolean[composer.count()];
   }
 
+  /** Variables in order of their first use. */
   static ExpressionOrder depthFirst(Composer composer, int root) {
     ExpressionOrder order = new ExpressionOrder(composer);
     order.visit(root);
@@ -37,11 +38,13 @@ final class ExpressionOrder {
     return order;
   }
 
+  /** The caller's order; the parts of gates are brought into it as far as they can be. */
   static ExpressionOrder given(Composer composer, int root, int[] variables) {
     ExpressionOrder order = new ExpressionOrder(composer);
     for (int variable : variables) {
       order.place(variable);
     }
+    order.sortParts();
     order.visit(root);
     order.measure();
     return order;
@@ -54,12 +57,29 @@ final class ExpressionOrder {
     }
   }
 
+  /** Reads the parts of each gate and of each family in order of their first variables. */
+  private void sortParts() {
+    int[] shallowest = new int[composer.count()];
+    for (int expression = 0; expression < shallowest.length; expression++) {
+      int least = Integer.MAX_VALUE;
+      if (composer.isLeaf(expression)) {
+        least = level[composer.variableOf(expression)];
+      } else if (composer.operatorOf(expression) instanceof Threshold) {
+        composer.arrange(expression, composer.sortedParts(expression, part -> shallowest[part]));
+      } else if (composer.operatorOf(expression) instanceof Family family) {
+        int[] slots = composer.sortedSlots(expression, part -> shallowest[part]);
+        composer.replace(expression, family.inOrder(slots), composer.parts(expression));
+      }
+      for (int l = composer.levels(expression) - 1; l >= 0; l--) {
+        least = Math.min(least, shallowest[composer.partAt(expression, l)]);
+      }
+      shallowest[expression] = least;
+    }
+  }
+
   /** Depth-first: places variables at their first use and finds the knots. */
   private void visit(int root) {
-    int expressions = composer.count();
-    int[] lastUse = new int[expressions];
-    int[] lastVariableUse = new int[composer.variables()];
-    boolean[] expanded = new boolean[expressions];
+    int[] lastUse = new int[composer.count()];
     int[] open = new int[64];
     int[] nextLevel = new int[64];
     int[] opened = new int[64];
@@ -69,16 +89,13 @@ final class ExpressionOrder {
     while (true) {
       if (arriving >= 0) {
         clock++;
-        int[] uses = composer.isLeaf(arriving) ? lastVariableUse : lastUse;
-        int thing = composer.isLeaf(arriving) ? composer.variableOf(arriving) : arriving;
-        if (uses[thing] > 0) {
-          knot[open[deepestOpenBefore(opened, depth, uses[thing])]] = true;
-        }
-        uses[thing] = clock;
-        if (composer.isLeaf(arriving)) {
-          place(thing);
-        } else if (!expanded[arriving]) {
-          expanded[arriving] = true;
+        int before = lastUse[arriving];
+        lastUse[arriving] = clock;
+        if (before > 0) {
+          knot[open[deepestOpenBefore(opened, depth, before)]] = true;
+        } else if (composer.isLeaf(arriving)) {
+          place(composer.variableOf(arriving));
+        } else {
           if (depth == open.length) {
             open = Arrays.copyOf(open, depth << 1);
             nextLevel = Arrays.copyOf(nextLevel, depth << 1);
@@ -111,15 +128,11 @@ final class ExpressionOrder {
 
   private void measure() {
     for (int expression = 0; expression < composer.count(); expression++) {
-      if (composer.isLeaf(expression)) {
-        deepest[expression] = level[composer.variableOf(expression)];
-      } else {
-        int most = -1;
-        for (int l = composer.levels(expression) - 1; l >= 0; l--) {
-          most = Math.max(most, deepest[composer.partAt(expression, l)]);
-        }
-        deepest[expression] = most;
+      int most = composer.isLeaf(expression) ? level[composer.variableOf(expression)] : -1;
+      for (int l = composer.levels(expression) - 1; l >= 0; l--) {
+        most = Math.max(most, deepest[composer.partAt(expression, l)]);
       }
+      deepest[expression] = most;
     }
   }
 

@@ -12,7 +12,7 @@ import java.util.Arrays;
  */
 final class NodeTable {
 
-  private static final int FIRST_CACHE = 1 << 10;
+  private static final int FIRST_CACHE = 1 << 8;
   private static final int LARGEST_CACHE = 1 << 24;
   private static final int FRAME = 5;
 

@@ -10,16 +10,35 @@ import org.jspecify.annotations.Nullable;
  */
 public abstract class Operator {
 
+  private @Nullable Diagram template;
+
   Operator() {}
 
   /** The number of slots read at most, which is the number of levels of the template. */
   abstract int levels();
 
   /** The slot read on a level of the template. */
-  abstract int slotAt(int level);
+  int slotAt(int level) {
+    return level;
+  }
+
+  /** Whether the template is known to be reduced. */
+  boolean isReduced() {
+    return true;
+  }
 
   /** The template; the same object every time. */
-  abstract Diagram template(WorkMeter meter);
+  final Diagram template(WorkMeter meter) {
+    Diagram made = template;
+    if (made == null) {
+      made = make(meter);
+      template = made;
+    }
+    return made;
+  }
+
+  /** Builds the template. */
+  abstract Diagram make(WorkMeter meter);
 
   /**
    * The probabilities that the operator works and fails, when its slots are independent.
@@ -28,16 +47,15 @@ public abstract class Operator {
    * @param fails indexed by slot
    * @param result receives both
    */
-  abstract void expect(double[] works, double[] fails, double[] result, WorkMeter meter);
-
-  /** An operator with a template at hand. */
-  static Operator of(Diagram template) {
-    return new Fixed(template);
+  void expect(double[] works, double[] fails, double[] result, WorkMeter meter) {
+    Evaluation evaluation = Evaluation.of(template(meter), works, fails);
+    result[0] = evaluation.works();
+    result[1] = evaluation.fails();
   }
 
-  /** k-out-of-n:G. */
-  static Operator threshold(int k, int n) {
-    return new Threshold(k, n);
+  /** An operator with a reduced template at hand. */
+  static Operator of(Diagram template) {
+    return new Fixed(template);
   }
 
   /** An operator that decides slot by slot. */
@@ -51,100 +69,30 @@ public abstract class Operator {
   }
 
   private static final class Fixed extends Operator {
-    private final Diagram template;
+    private final Diagram fixed;
 
-    Fixed(Diagram template) {
-      this.template = template;
+    Fixed(Diagram fixed) {
+      this.fixed = fixed;
     }
 
     @Override
     int levels() {
-      return template.levels();
+      return fixed.levels();
     }
 
     @Override
     int slotAt(int level) {
-      return template.variableAt(level);
+      return fixed.variableAt(level);
     }
 
     @Override
-    Diagram template(WorkMeter meter) {
-      return template;
-    }
-
-    @Override
-    void expect(double[] works, double[] fails, double[] result, WorkMeter meter) {
-      Evaluation evaluation = Evaluation.of(template, works, fails);
-      result[0] = evaluation.works();
-      result[1] = evaluation.fails();
-    }
-  }
-
-  private static final class Threshold extends Operator {
-    private final int k;
-    private final int n;
-    private @Nullable Diagram template;
-
-    Threshold(int k, int n) {
-      this.k = k;
-      this.n = n;
-    }
-
-    @Override
-    int levels() {
-      return n;
-    }
-
-    @Override
-    int slotAt(int level) {
-      return level;
-    }
-
-    @Override
-    Diagram template(WorkMeter meter) {
-      Diagram made = template;
-      if (made == null) {
-        made = Templates.threshold(k, n, meter);
-        template = made;
-      }
-      return made;
-    }
-
-    /** By number of working slots so far; those that can no longer change anything settle. */
-    @Override
-    void expect(double[] works, double[] fails, double[] result, WorkMeter meter) {
-      double[] mass = new double[k];
-      mass[0] = 1;
-      result[0] = 0;
-      result[1] = 0;
-      for (int slot = 0; slot < n; slot++) {
-        meter.at(k >> 3);
-        int most = Math.min(slot, k - 1);
-        int least = Math.max(0, k - (n - slot));
-        double up = works[slot];
-        double down = fails[slot];
-        if (most == k - 1) {
-          result[0] += mass[most] * up;
-          mass[most] *= down;
-        } else {
-          mass[most + 1] = mass[most] * up;
-          mass[most] *= down;
-        }
-        for (int count = most - 1; count >= least; count--) {
-          mass[count + 1] += mass[count] * up;
-          mass[count] *= down;
-        }
-        if (k - (n - slot) >= 0) {
-          result[1] += mass[least];
-          mass[least] = 0;
-        }
-      }
+    Diagram make(WorkMeter meter) {
+      return fixed;
     }
   }
 
   private static final class Swept extends Operator {
     private final StateRule rule;
-    private @Nullable Diagram template;
 
     Swept(StateRule rule) {
       this.rule = rule;
@@ -161,13 +109,13 @@ public abstract class Operator {
     }
 
     @Override
-    Diagram template(WorkMeter meter) {
-      Diagram made = template;
-      if (made == null) {
-        made = StateSweep.template(rule, meter);
-        template = made;
-      }
-      return made;
+    boolean isReduced() {
+      return false;
+    }
+
+    @Override
+    Diagram make(WorkMeter meter) {
+      return StateSweep.template(rule, meter);
     }
 
     @Override
@@ -178,7 +126,6 @@ public abstract class Operator {
 
   private static final class Dual extends Operator {
     private final Operator primal;
-    private @Nullable Diagram template;
 
     Dual(Operator primal) {
       this.primal = primal;
@@ -195,13 +142,13 @@ public abstract class Operator {
     }
 
     @Override
-    Diagram template(WorkMeter meter) {
-      Diagram made = template;
-      if (made == null) {
-        made = Templates.dual(primal.template(meter));
-        template = made;
-      }
-      return made;
+    boolean isReduced() {
+      return primal.isReduced();
+    }
+
+    @Override
+    Diagram make(WorkMeter meter) {
+      return Templates.dual(primal.make(meter));
     }
 
     @Override

@@ -2,7 +2,6 @@ package org.kingbolt.core.diagram;
 
 import java.util.ArrayList;
 import java.util.BitSet;
-import java.util.Comparator;
 import java.util.List;
 
 /**
@@ -13,11 +12,10 @@ import java.util.List;
  */
 public final class Templates {
 
-  /** Series and parallel operators of up to so many slots are made once. */
-  private static final int MOST_CHAINS = 64;
+  /** Gates of up to so many slots are made once. */
+  private static final int MOST_SHARED = 12;
 
-  private static final List<Operator> ALL = chains(true);
-  private static final List<Operator> ANY = chains(false);
+  private static final List<List<Operator>> SHARED = shared();
 
   private Templates() {}
 
@@ -39,38 +37,21 @@ public final class Templates {
    * @return an operator whose template has {@code k (n - k + 1)} nodes; time is linear in that
    */
   public static Operator atLeast(int k, int n) {
-    if (n <= MOST_CHAINS && (k == 1 || k == n)) {
-      return (k == n ? ALL : ANY).get(n);
-    }
-    return k == 1 || k == n ? Operator.of(Layers.chain(n, k == n)) : Operator.threshold(k, n);
+    return n >= 1 && n <= MOST_SHARED ? SHARED.get(n - 1).get(k - 1) : new Threshold(k, n);
   }
 
-  private static List<Operator> chains(boolean series) {
-    List<Operator> chains = new ArrayList<>();
-    for (int n = 0; n <= MOST_CHAINS; n++) {
-      chains.add(Operator.of(n == 0 ? Diagram.constant(series) : Layers.chain(n, series)));
-    }
-    return List.copyOf(chains);
-  }
-
-  static Diagram threshold(int k, int n, WorkMeter meter) {
-    Layers layers = new Layers();
-    long held = 0;
-    for (int i = 0; i < n; i++) {
-      int least = Math.max(0, k - (n - i));
-      int most = Math.min(i, k - 1);
-      int nextLeast = Math.max(0, k - (n - i - 1));
-      int[] low = new int[most - least + 1];
-      int[] high = new int[most - least + 1];
-      for (int c = least; c <= most; c++) {
-        low[c - least] = c < nextLeast ? Layers.TO_FAILS : c - nextLeast;
-        high[c - least] = c + 1 == k ? Layers.TO_WORKS : c + 1 - nextLeast;
+  private static List<List<Operator>> shared() {
+    List<List<Operator>> all = new ArrayList<>();
+    for (int n = 1; n <= MOST_SHARED; n++) {
+      List<Operator> gates = new ArrayList<>();
+      for (int k = 1; k <= n; k++) {
+        Operator gate = new Threshold(k, n);
+        gate.template(WorkMeter.UNLIMITED);
+        gates.add(gate);
       }
-      held += low.length;
-      meter.at(held);
-      layers.add(i, low, high);
+      all.add(gates);
     }
-    return layers.diagram();
+    return all;
   }
 
   /**
@@ -104,54 +85,10 @@ public final class Templates {
    * @param n the number of slots
    * @param sets none empty, at least one; sorted or not, minimal or not
    * @param paths whether the sets are path sets, or else cut sets
-   * @param meter hears of every node
-   * @return an operator whose template is the reduced diagram, slots of common sets close together.
-   *     Cost: the sets are joined pairwise, so that no set is touched more than a logarithmic
-   *     number of times; sizes depend on the family.
+   * @return an operator whose template is the reduced diagram, slots of common sets close together
    */
-  public static Operator family(int n, List<BitSet> sets, boolean paths, WorkMeter meter) {
-    int[] order = FamilyOrder.of(n, sets);
-    List<BitSet> placed = placed(sets, order);
-    NodeTable table = new NodeTable(n, meter);
-    int[] made = new int[placed.size()];
-    for (int i = 0; i < made.length; i++) {
-      int id = paths ? Diagram.WORKS : Diagram.FAILS;
-      BitSet set = placed.get(i);
-      for (int slot = set.length() - 1;
-          slot >= 0;
-          slot = slot > 0 ? set.previousSetBit(slot - 1) : -1) {
-        id = paths ? table.node(slot, Diagram.FAILS, id) : table.node(slot, id, Diagram.WORKS);
-      }
-      made[i] = id;
-    }
-    for (int count = made.length; count > 1; count = (count + 1) >> 1) {
-      for (int i = 0; i < count >> 1; i++) {
-        made[i] =
-            paths
-                ? table.or(made[2 * i], made[2 * i + 1])
-                : table.and(made[2 * i], made[2 * i + 1]);
-      }
-      if ((count & 1) == 1) {
-        made[count >> 1] = made[count - 1];
-      }
-    }
-    return Operator.of(table.diagram(made[0], order));
-  }
-
-  /** The sets in terms of places in an order, those that begin first in front. */
-  private static List<BitSet> placed(List<BitSet> sets, int[] order) {
-    int[] place = new int[order.length];
-    for (int i = 0; i < order.length; i++) {
-      place[order[i]] = i;
-    }
-    List<BitSet> placed = new ArrayList<>();
-    for (BitSet set : sets) {
-      BitSet moved = new BitSet();
-      set.stream().forEach(slot -> moved.set(place[slot]));
-      placed.add(moved);
-    }
-    placed.sort(Comparator.comparingInt((BitSet set) -> set.nextSetBit(0)));
-    return placed;
+  public static Operator family(int n, List<BitSet> sets, boolean paths) {
+    return new Family(n, sets, paths);
   }
 
   /**

@@ -12,7 +12,7 @@ import java.util.Arrays;
 final class UniqueTable {
 
   private static final int FIRST_CAPACITY = 1 << 8;
-  private static final int LARGEST_SIZE = 1 << 29;
+  static final int LARGEST_SIZE = 1 << 29;
 
   private final int terminalLevel;
   private final WorkMeter meter;
