@@ -487,8 +487,9 @@ public abstract sealed class Structure implements Serializable
    * Compiles this structure into a decision diagram.
    *
    * @param budget how much work it may cost
-   * @return the system, ready to answer. Cost: linear for gates that share no components; for
-   *     networks exponential in the width, linear in the length; in general at most exponential.
+   * @return the system, ready to answer. Cost: linear for gates that share no components; where
+   *     they do, at most exponential in the smallest gate that holds all uses, of which several
+   *     orders are tried; for networks exponential in the width, linear in the length.
    * @throws BudgetExceededException if the budget is used up
    */
   public CoherentSystem compile(Budget budget) {
