@@ -26,7 +26,10 @@ public final class Bounds {
    * @throws org.kingbolt.core.BudgetExceededException if the structure is too large to compile
    */
   public static Bounds of(Structure structure) {
-    return of(Objects.requireNonNull(structure, "structure is null").compile());
+    return of(
+        Objects.requireNonNull(
+                structure, "structure is null; give a structure, or a system compiled from one")
+            .compile());
   }
 
   /**
@@ -36,7 +39,9 @@ public final class Bounds {
    * @return a start for questions
    */
   public static Bounds of(CoherentSystem system) {
-    return new Bounds(Objects.requireNonNull(system, "system is null"));
+    return new Bounds(
+        Objects.requireNonNull(
+            system, "system is null; give a compiled system, or a structure to compile"));
   }
 
   /**
@@ -47,7 +52,11 @@ public final class Bounds {
    * @throws IllegalArgumentException if components have no probability; the message lists them
    */
   public BoundsAtProbabilities given(Probabilities p) {
-    return new BoundsAtProbabilities(system, Objects.requireNonNull(p, "probabilities are null"));
+    return new BoundsAtProbabilities(
+        system,
+        Objects.requireNonNull(
+            p,
+            "probabilities are null; give those of all components, such as Probabilities.all(0.9)"));
   }
 
   /**

@@ -63,7 +63,7 @@ public final class BoundsAtProbabilities {
    * @throws org.kingbolt.core.BudgetExceededException if the budget is used up
    */
   public Interval esaryProschan(Budget budget) {
-    Objects.requireNonNull(budget, "budget is null");
+    requireBudget(budget);
     SetProduct cuts = combined(system.minimalCutSets(budget), false, budget);
     SetProduct paths = combined(system.minimalPathSets(budget), true, budget);
     return new Interval(
@@ -101,7 +101,7 @@ public final class BoundsAtProbabilities {
    * @throws org.kingbolt.core.BudgetExceededException if the budget is used up
    */
   public Interval minMax(Budget budget) {
-    Objects.requireNonNull(budget, "budget is null");
+    requireBudget(budget);
     SetProduct path = best(system.minimalPathSets(budget), true, budget);
     SetProduct cut = best(system.minimalCutSets(budget), false, budget);
     return new Interval(
@@ -111,6 +111,10 @@ public final class BoundsAtProbabilities {
         "min-max",
         "with associated components the system works at least as often as its best path, and fails"
             + " at least as often as its worst cut, would with independent members");
+  }
+
+  private static void requireBudget(Budget budget) {
+    Objects.requireNonNull(budget, "budget is null; give one, such as Budget.ofHeap()");
   }
 
   /** Operations in an exact evaluation, for whose rounding an interval must leave room, too. */

@@ -85,7 +85,8 @@ public final class Interval {
    * @return whether it does, judged on its smaller side, which has more digits
    */
   public boolean contains(Probability probability) {
-    Objects.requireNonNull(probability, "probability is null");
+    Objects.requireNonNull(
+        probability, "probability is null; give one, such as Probability.failing(1e-6)");
     return probability.failing() <= probability.working()
         ? probability.failing() <= lower.failing() && probability.failing() >= upper.failing()
         : probability.working() >= lower.working() && probability.working() <= upper.working();

@@ -12,8 +12,10 @@ import net.jqwik.api.ForAll;
 import net.jqwik.api.Property;
 import net.jqwik.api.Provide;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.function.Executable;
 import org.kingbolt.core.Budget;
 import org.kingbolt.core.BudgetExceededException;
+import org.kingbolt.core.CoherentSystem;
 import org.kingbolt.core.Probabilities;
 import org.kingbolt.core.Probability;
 import org.kingbolt.core.Structure;
@@ -172,11 +174,31 @@ class BoundsTest {
             IllegalArgumentException.class,
             () -> Bounds.of(pair).given(Probabilities.working(java.util.Map.of("a", 0.5))));
     assertTrue(missing.getMessage().contains("\"b\""), missing.getMessage());
-    assertThrows(NullPointerException.class, () -> Bounds.of((Structure) null));
-    assertThrows(NullPointerException.class, () -> Bounds.of(pair).given(null));
-    assertThrows(
-        NullPointerException.class,
-        () -> Bounds.of(pair).given(Probabilities.all(0.5)).minMax(null));
+  }
+
+  private static void assertNullRefused(String message, Executable call) {
+    assertEquals(message, assertThrows(NullPointerException.class, call).getMessage());
+  }
+
+  @Test
+  void nullArguments_areNamed() {
+    Structure pair = Structure.series("a", "b");
+    assertNullRefused(
+        "structure is null; give a structure, or a system compiled from one",
+        () -> Bounds.of((Structure) null));
+    assertNullRefused(
+        "system is null; give a compiled system, or a structure to compile",
+        () -> Bounds.of((CoherentSystem) null));
+    assertNullRefused(
+        "probabilities are null; give those of all components, such as Probabilities.all(0.9)",
+        () -> Bounds.of(pair).given(null));
+    BoundsAtProbabilities bounds = Bounds.of(pair).given(Probabilities.all(0.5));
+    String budget = "budget is null; give one, such as Budget.ofHeap()";
+    assertNullRefused(budget, () -> bounds.minMax(null));
+    assertNullRefused(budget, () -> bounds.esaryProschan(null));
+    assertNullRefused(
+        "probability is null; give one, such as Probability.failing(1e-6)",
+        () -> bounds.minMax().contains(null));
   }
 
   @Test

@@ -74,7 +74,12 @@ public final class BudgetExceededException extends RuntimeException {
     return new BudgetExceededException(
         Limit.INTERRUPT,
         reached,
-        "the thread was interrupted while " + work + ", with " + reached + " nodes made");
+        "the thread was interrupted while "
+            + work
+            + ", with "
+            + reached
+            + " nodes made; to go on, clear its flag with Thread.interrupted() and ask again; to end"
+            + " long work without interrupting it, give a Budget of time");
   }
 
   /**

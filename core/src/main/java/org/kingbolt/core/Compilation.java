@@ -59,7 +59,7 @@ final class Compilation {
     int[] variables = new int[components.size()];
     int count = 0;
     for (String name : Check.notNull(order, "the order of components")) {
-      Integer number = numbers.get(Check.name(name, "the order of components"));
+      Integer number = numbers.get(Check.name(name, "the order of components", count + 1));
       if (number == null) {
         throw Check.unknown(name, components);
       }

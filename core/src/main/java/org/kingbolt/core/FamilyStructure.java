@@ -38,8 +38,9 @@ final class FamilyStructure extends Structure {
     List<List<Structure>> structures = new ArrayList<>();
     for (Collection<String> set : sets) {
       List<Structure> members = new ArrayList<>();
-      for (String name : Check.notNull(set, kind + ": set " + (structures.size() + 1))) {
-        members.add(component(Check.name(name, kind)));
+      String where = kind + ": set " + (structures.size() + 1);
+      for (String name : Check.notNull(set, where)) {
+        members.add(new ComponentStructure(Check.name(name, where, members.size() + 1)));
       }
       structures.add(members);
     }
@@ -71,7 +72,17 @@ final class FamilyStructure extends Structure {
       for (Structure part : sets.get(i)) {
         GateStructure.requireComponents(kind + ": a member of set " + (i + 1), part);
         slots.putIfAbsent(part, slots.size());
-        set.set(slots.get(part));
+        int slot = slots.get(part);
+        if (set.get(slot)) {
+          throw new IllegalArgumentException(
+              kind
+                  + ": set "
+                  + (i + 1)
+                  + " lists "
+                  + TextWriter.excerpt(part)
+                  + " twice; list every member once");
+        }
+        set.set(slot);
       }
       distinct.add(set);
     }

@@ -148,7 +148,7 @@ final class Lexer {
   }
 
   private void escape(StringBuilder name) {
-    int c = at < text.length() ? text.charAt(at) : -1;
+    int c = at < text.length() ? text.codePointAt(at) : -1;
     switch (c) {
       case '"', '\\' -> name.append((char) c);
       case 'n' -> name.append('\n');
@@ -169,7 +169,7 @@ final class Lexer {
               line,
               column,
               "one of \\\" \\\\ \\n \\t \\u",
-              c < 0 ? "the end of the text" : "'\\" + (char) c + "'");
+              c < 0 ? "the end of the text" : "'\\" + Character.toString(c) + "'");
     }
     step();
   }

@@ -167,7 +167,7 @@ public final class MinimalSets implements Iterable<Set<String>> {
     Check.notNull(set, "set");
     Check.notNull(p, "probabilities");
     double product = 1;
-    for (Probability value : p.forComponents(List.copyOf(set))) {
+    for (Probability value : p.forComponents(new ArrayList<>(set))) {
       product *= side(value);
     }
     return product;

@@ -8,6 +8,8 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
+import java.util.function.Supplier;
+import org.jspecify.annotations.Nullable;
 import org.kingbolt.core.NetworkStructure.Link;
 import org.kingbolt.core.NetworkStructure.Question;
 
@@ -42,7 +44,7 @@ public final class NetworkBuilder {
    * @throws IllegalArgumentException if a name is blank or both nodes are the same
    */
   public NetworkBuilder link(String component, String a, String b) {
-    return link(Structure.component(component), a, b);
+    return link(component(component, () -> between("link", a, b)), a, b);
   }
 
   /**
@@ -69,7 +71,7 @@ public final class NetworkBuilder {
    * @throws IllegalArgumentException if a name is blank or both nodes are the same
    */
   public NetworkBuilder arc(String component, String from, String to) {
-    return arc(Structure.component(component), from, to);
+    return arc(component(component, () -> between("arc", from, to)), from, to);
   }
 
   /**
@@ -120,7 +122,8 @@ public final class NetworkBuilder {
    * @throws IllegalStateException if this was already said of the node
    */
   public NetworkBuilder node(String node, String component) {
-    return node(node, Structure.component(component));
+    Check.name(node, "network node");
+    return node(node, component(component, () -> "node " + Check.quoted(node)));
   }
 
   /**
@@ -227,11 +230,12 @@ public final class NetworkBuilder {
   }
 
   private NetworkBuilder add(Structure part, Link link) {
-    Check.name(link.from(), "network node");
-    Check.name(link.to(), "network node");
+    String kind = link.arc() ? "arc" : "link";
+    requireNode(link.from(), kind, link);
+    requireNode(link.to(), kind, link);
     if (link.from().equals(link.to())) {
       throw new IllegalArgumentException(
-          (link.arc() ? "arc" : "link")
+          kind
               + " from "
               + Check.quoted(link.from())
               + " to itself; it connects nothing, so leave it out");
@@ -245,8 +249,21 @@ public final class NetworkBuilder {
     return this;
   }
 
+  private static void requireNode(String node, String kind, Link link) {
+    Check.name(node, () -> between(kind, link.from(), link.to()) + ": a network node's name");
+  }
+
+  private static Structure component(String name, Supplier<String> user) {
+    return new ComponentStructure(Check.name(name, () -> user.get() + ": the component's name"));
+  }
+
+  /** A link for a message; its nodes' names may be null. */
+  private static String between(String kind, @Nullable String from, @Nullable String to) {
+    return kind + " from " + Check.quoted(from) + " to " + Check.quoted(to);
+  }
+
   private static Structure requirePart(String kind, Structure part, String from, String to) {
-    String where = kind + " from " + Check.quoted(from) + " to " + Check.quoted(to);
+    String where = between(kind, from, to);
     GateStructure.requireComponents(where, Check.notNull(part, where + ": the part"));
     return part;
   }
@@ -254,14 +271,17 @@ public final class NetworkBuilder {
   private List<String> requireTerminals(String question, int fewest, String... terminals) {
     Set<String> distinct = new LinkedHashSet<>();
     for (String terminal : terminals) {
-      Check.name(terminal, question);
+      Check.name(terminal, question, distinct.size() + 1);
       if (!nodes.contains(terminal)) {
         throw new IllegalArgumentException(
             question
                 + ": "
                 + Check.quoted(terminal)
-                + " is not a node of the network; the nodes are "
-                + Check.listed(nodes));
+                + " is not a node of the network"
+                + Spelling.guess(terminal, nodes)
+                + "; the nodes are "
+                + Check.listed(nodes)
+                + (nodes.isEmpty() ? "; add a link first" : "; name one of these"));
       }
       if (!distinct.add(terminal)) {
         throw new IllegalArgumentException(

@@ -172,15 +172,6 @@ abstract class ParserCall {
 
     @Override
     @Nullable Structure accept(Structure part) {
-      if (set.contains(part)) {
-        throw new IllegalArgumentException(
-            (paths ? FamilyStructure.PATHS : FamilyStructure.CUTS)
-                + ": set "
-                + (sets.size() + 1)
-                + " lists "
-                + TextWriter.excerpt(part)
-                + " twice; list every member once");
-      }
       set.add(part);
       if (more('}', "a comma or a closing brace")) {
         return null;

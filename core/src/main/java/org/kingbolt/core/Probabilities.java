@@ -152,7 +152,8 @@ public final class Probabilities implements Serializable {
    * @return true if it is listed, or if the register has a value for all others
    */
   public boolean covers(String component) {
-    return others != null || byName.containsKey(Check.notNull(component, "component"));
+    Check.notNull(component, "component");
+    return others != null || byName.containsKey(component);
   }
 
   /**
@@ -200,6 +201,7 @@ public final class Probabilities implements Serializable {
     Iterator<Map.Entry<String, Probability>> listed = byName.entrySet().iterator();
     boolean inOrder = true;
     for (String component : components) {
+      Check.notNull(component, "a name in the list of components");
       Probability value = null;
       if (inOrder && listed.hasNext()) {
         // registers often list the components in this very order, which spares a look-up
@@ -208,6 +210,7 @@ public final class Probabilities implements Serializable {
       }
       if (value == null) {
         inOrder = false;
+        Check.notNull(component, "a name in the list of components");
         value = byName.getOrDefault(component, others);
       }
       if (value == null) {

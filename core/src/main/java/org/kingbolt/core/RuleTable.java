@@ -43,7 +43,7 @@ final class RuleTable {
     }
     Set<String> distinct = new HashSet<>();
     for (String name : names) {
-      if (!distinct.add(Check.name(name, KIND))) {
+      if (!distinct.add(Check.name(name, KIND, distinct.size() + 1))) {
         throw new IllegalArgumentException(
             KIND + ": " + Check.quoted(name) + " is listed twice; list every component once");
       }

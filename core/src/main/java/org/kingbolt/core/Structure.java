@@ -4,6 +4,7 @@ import com.google.common.collect.ImmutableList;
 import java.io.InvalidObjectException;
 import java.io.ObjectInputStream;
 import java.io.Serializable;
+import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.Collection;
 import java.util.List;
@@ -195,10 +196,11 @@ public abstract sealed class Structure implements Serializable
   /**
    * Works while all components of some set work.
    *
-   * @param sets path sets, minimal or not; at least one, none empty
+   * @param sets path sets, minimal or not; at least one, none empty, each with different names
    * @return the structure; components are ordered by first mention in the sets' own iteration
    *     order, which {@code Set.of} changes from run to run
-   * @throws IllegalArgumentException if there are no sets, or a set is empty, or a name is blank
+   * @throws IllegalArgumentException if there are no sets, or a set is empty, or a name is blank or
+   *     listed twice in one set
    */
   public static Structure ofPathSets(Collection<? extends Collection<String>> sets) {
     return FamilyStructure.described(true, sets);
@@ -207,10 +209,11 @@ public abstract sealed class Structure implements Serializable
   /**
    * Fails when all components of some set have failed.
    *
-   * @param sets cut sets, minimal or not; at least one, none empty
+   * @param sets cut sets, minimal or not; at least one, none empty, each with different names
    * @return the structure; components are ordered by first mention in the sets' own iteration
    *     order, which {@code Set.of} changes from run to run
-   * @throws IllegalArgumentException if there are no sets, or a set is empty, or a name is blank
+   * @throws IllegalArgumentException if there are no sets, or a set is empty, or a name is blank or
+   *     listed twice in one set
    */
   public static Structure ofCutSets(Collection<? extends Collection<String>> sets) {
     return FamilyStructure.described(false, sets);
@@ -626,17 +629,16 @@ public abstract sealed class Structure implements Serializable
 
   private static List<Structure> list(Structure[] parts, String where) {
     Check.notNull(parts, where + ": the list of parts");
-    for (Structure part : parts) {
-      Check.notNull(part, where + ": a part");
-    }
     return Arrays.asList(parts);
   }
 
   private static List<Structure> named(String[] names, String where) {
     Check.notNull(names, where + ": the list of names");
-    return Arrays.stream(names)
-        .map(name -> (Structure) new ComponentStructure(Check.name(name, where)))
-        .toList();
+    List<Structure> named = new ArrayList<>(names.length);
+    for (String name : names) {
+      named.add(new ComponentStructure(Check.name(name, where, named.size() + 1)));
+    }
+    return named;
   }
 
   private static String[] array(List<String> names, String where) {

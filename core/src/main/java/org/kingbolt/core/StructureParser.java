@@ -41,7 +41,7 @@ final class StructureParser {
     }
     lexer.next();
     if (word.kind() == Lexer.Kind.QUOTED || !lexer.peek().isMark('(')) {
-      if (word.text().isBlank()) {
+      if (Check.isInvisible(word.text())) {
         throw word.expected("a name with at least one visible character");
       }
       return Structure.component(word.text());

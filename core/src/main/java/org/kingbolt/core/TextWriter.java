@@ -30,7 +30,11 @@ final class TextWriter {
   /** The text, cut short for a message. */
   static String excerpt(Structure root) {
     String text = write(root, EXCERPT);
-    return text.length() > EXCERPT ? text.substring(0, EXCERPT) + "..." : text;
+    if (text.length() <= EXCERPT) {
+      return text;
+    }
+    boolean withinPair = Character.isSurrogatePair(text.charAt(EXCERPT - 1), text.charAt(EXCERPT));
+    return text.substring(0, withinPair ? EXCERPT - 1 : EXCERPT) + "...";
   }
 
   private static String write(Structure root, int enough) {
@@ -94,26 +98,24 @@ final class TextWriter {
       return name;
     }
     StringBuilder quoted = new StringBuilder("\"");
-    for (int i = 0; i < name.length(); i++) {
-      char c = name.charAt(i);
-      switch (c) {
-        case '"' -> quoted.append("\\\"");
-        case '\\' -> quoted.append("\\\\");
-        case '\n' -> quoted.append("\\n");
-        case '\t' -> quoted.append("\\t");
-        default -> {
-          boolean alone =
-              Character.isSurrogate(c)
-                  && Character.charCount(name.codePointAt(i)) == 1
-                  && (i == 0 || !Character.isHighSurrogate(name.charAt(i - 1)));
-          if (Character.isISOControl(c) || alone) {
-            quoted.append(String.format("\\u%04x", (int) c));
-          } else {
-            quoted.append(c);
-          }
-        }
-      }
-    }
+    name.codePoints()
+        .forEach(
+            c -> {
+              switch (c) {
+                case '"' -> quoted.append("\\\"");
+                case '\\' -> quoted.append("\\\\");
+                case '\n' -> quoted.append("\\n");
+                case '\t' -> quoted.append("\\t");
+                default -> {
+                  // half of a pair counts as a code point only where the other half is missing
+                  if (Character.isISOControl(c) || Character.getType(c) == Character.SURROGATE) {
+                    quoted.append(String.format("\\u%04x", c));
+                  } else {
+                    quoted.appendCodePoint(c);
+                  }
+                }
+              }
+            });
     return quoted.append('"').toString();
   }
 }

@@ -89,7 +89,17 @@ class BadNameTest {
   }
 
   static Stream<BadCall> blankNames() {
-    return Stream.of("", " ", " \t\n", "\u2003")
+    return Stream.of(
+            "",
+            " ",
+            " \t\n",
+            "\u2003",
+            "\u00a0",
+            "\u200b",
+            "\u2060\ufeff",
+            "\u0007",
+            "\ud83d",
+            "\u00ad \u0378")
         .flatMap(
             name ->
                 nameTakers()
@@ -106,6 +116,54 @@ class BadNameTest {
   @ParameterizedTest
   @MethodSource
   void blankNames(BadCall bad) {
+    bad.check();
+  }
+
+  private static Stream<NameTaker> listTakers() {
+    return Stream.of(
+        new NameTaker("series: name 2", name -> Structure.series("a", name)),
+        new NameTaker("parallel: name 1", name -> Structure.parallel(name, "a")),
+        new NameTaker("atLeast: name 3", name -> Structure.atLeast(1, "a", "b", name)),
+        new NameTaker(
+            "withoutFailureRun: name 2", name -> Structure.withoutFailureRun(1, "a", name)),
+        new NameTaker(
+            "withoutFailureRunAround: name 2",
+            name -> Structure.withoutFailureRunAround(1, with(name))),
+        new NameTaker(
+            "ofPathSets: set 2: name 2",
+            name -> Structure.ofPathSets(List.of(List.of("b"), with(name)))),
+        new NameTaker("ofCutSets: set 1: name 2", name -> Structure.ofCutSets(List.of(with(name)))),
+        new NameTaker("ofRule: name 2", name -> Structure.ofRule(with(name), Set::isEmpty)),
+        new NameTaker("connecting: name 2", name -> line().connecting("x", name)),
+        new NameTaker(
+            "the order of components: name 2", name -> AB.compile(with(name), Budget.ofHeap())));
+  }
+
+  static Stream<BadCall> placeInAList() {
+    return listTakers()
+        .flatMap(
+            taker ->
+                Stream.of(
+                    isNull(taker.where, () -> taker.call.accept(null), taker.where + " is null"),
+                    illegal(taker.where, () -> taker.call.accept(" "), taker.where + " is \" \"")));
+  }
+
+  @ParameterizedTest
+  @MethodSource
+  void placeInAList(BadCall bad) {
+    bad.check();
+  }
+
+  static Stream<BadCall> invisibleNames_areSpelledOut() {
+    return Stream.of(
+        illegal("space", () -> Structure.component("\u200b\u00a0"), "(U+200B U+00A0); it must"),
+        illegal("tag", () -> Structure.component("\udb40\udc01"), "(U+E0001); it must"),
+        illegal("nothing", () -> Structure.component(""), "a name is \"\"; it must"));
+  }
+
+  @ParameterizedTest
+  @MethodSource
+  void invisibleNames_areSpelledOut(BadCall bad) {
     bad.check();
   }
 
@@ -134,7 +192,25 @@ class BadNameTest {
   }
 
   static Stream<BadCall> almostKnownNames() {
+    Structure pumps = Structure.series("pump 1", "pump 2", "valve", "Intake filter", "bus");
+    NetworkBuilder yard = Structure.network().link("L", "north gate", "south gate");
+    String valve = "(did you mean \"valve\"?); the components are \"pump 1\"";
+    String filter = "(did you mean \"Intake filter\"?); the";
     return Stream.of(
+        illegal("left out", () -> pumps.givenFailed("vave"), valve, "; name one of these"),
+        illegal("added", () -> pumps.givenWorking("vallve"), valve),
+        illegal("changed", () -> pumps.works(Set.of("value")), valve),
+        illegal("swapped", () -> pumps.compile().pivot("vavle"), valve),
+        illegal("two slips", () -> pumps.givenFailed("intakefiltre"), filter),
+        illegal("nearest", () -> pumps.givenFailed("pump2"), "(did you mean \"pump 2\"?); the"),
+        illegal("too far", () -> pumps.givenFailed("vacuum"), "component \"vacuum\"; the"),
+        illegal("two of five", () -> pumps.givenFailed("halbe"), "component \"halbe\"; the"),
+        illegal("too short", () -> AB.givenFailed("c"), "component \"c\"; the components"),
+        illegal(
+            "node",
+            () -> yard.connecting("north gate", "suoth gate"),
+            "\"suoth gate\" is not a node of the network (did you mean \"south gate\"?); the nodes",
+            "; name one of these"),
         illegal("case", () -> AB.givenFailed("A"), "\"A\"", "did you mean \"a\"?"),
         illegal("blanks", () -> AB.works(Set.of(" b ")), "\" b \"", "did you mean \"b\"?"));
   }
@@ -154,6 +230,16 @@ class BadNameTest {
         illegal("run", () -> Structure.withoutFailureRun(2, "a", "b", "a"), part),
         illegal("around", () -> Structure.withoutFailureRunAround(2, "a", "b", "a"), part),
         illegal("structures", () -> Structure.parallel(AB, AB), "part 2", "series(a, b)"),
+        illegal(
+            "paths",
+            () -> Structure.ofPathSets(List.of(List.of("a", "b"), List.of("b", "c", "b"))),
+            "ofPathSets: set 2 lists b twice",
+            "every member once"),
+        illegal(
+            "cuts",
+            () -> Structure.ofCutSets(List.of(List.of("a", "a"), List.of("b"))),
+            "ofCutSets: set 1 lists a twice",
+            "every member once"),
         illegal(
             "ofRule",
             () -> Structure.ofRule(List.of("a", "a"), Set::isEmpty),

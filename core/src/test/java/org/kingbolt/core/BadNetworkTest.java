@@ -2,6 +2,7 @@ package org.kingbolt.core;
 
 import static org.kingbolt.core.BadCall.illegal;
 import static org.kingbolt.core.BadCall.incoherent;
+import static org.kingbolt.core.BadCall.isNull;
 
 import java.util.List;
 import java.util.stream.Stream;
@@ -48,6 +49,38 @@ class BadNetworkTest {
             () -> line().node("x", "bus").node("x", "board"),
             List.of("node \"x\"", "already depends on bus", "Structure.series of the two"))
         .check();
+  }
+
+  static Stream<BadCall> names() {
+    String link = "link from \"x\" to \"z\": the component's name is ";
+    String arc = "arc from \"x\" to \"z\": the component's name is ";
+    String end = ": a network node's name is ";
+    return Stream.of(
+        isNull("link", () -> line().link((String) null, "x", "z"), link + "null"),
+        illegal("link", () -> line().link(" ", "x", "z"), link + "\" \""),
+        isNull("arc", () -> line().arc((String) null, "x", "z"), arc + "null"),
+        illegal("arc", () -> line().arc(" ", "x", "z"), arc + "\" \""),
+        isNull(
+            "node",
+            () -> line().node("x", (String) null),
+            "node \"x\": the component's name is null"),
+        illegal("node", () -> line().node("x", " "), "node \"x\": the component's name is \" \""),
+        isNull("from", () -> line().link("L", null, "z"), "link from null to \"z\"" + end + "null"),
+        illegal("to", () -> line().arc("L", "x", ""), "arc from \"x\" to \"\"" + end + "\"\""),
+        isNull(
+            "perfect link",
+            () -> line().perfectLink("x", null),
+            "link from \"x\" to null" + end + "null"),
+        illegal(
+            "perfect arc",
+            () -> line().perfectArc("", "z"),
+            "arc from \"\" to \"z\"" + end + "\"\""));
+  }
+
+  @ParameterizedTest
+  @MethodSource
+  void names(BadCall bad) {
+    bad.check();
   }
 
   static Stream<BadCall> partsWithoutComponents() {

@@ -32,14 +32,14 @@ class NullArgumentTest {
     return Stream.of(
         isNull("series names", () -> Structure.series(NO_NAMES), "series: the list of names"),
         isNull("series list", () -> Structure.series(NO_PARTS), "series: the list of parts"),
-        isNull("series part", () -> Structure.series(AB, NO_STRUCTURE), "series: a part"),
+        isNull("series part", () -> Structure.series(AB, NO_STRUCTURE), "series: part 2"),
         isNull("series member", () -> Structure.series(Arrays.asList(AB, null)), "series: part 2"),
         isNull("parallel names", () -> Structure.parallel(NO_NAMES), "parallel: the list of names"),
         isNull("parallel list", () -> Structure.parallel(NO_PARTS), "parallel: the list of parts"),
-        isNull("parallel part", () -> Structure.parallel(AB, NO_STRUCTURE), "parallel: a part"),
+        isNull("parallel part", () -> Structure.parallel(AB, NO_STRUCTURE), "parallel: part 2"),
         isNull("atLeast names", () -> Structure.atLeast(1, NO_NAMES), "atLeast: the list of names"),
         isNull("atLeast list", () -> Structure.atLeast(1, NO_PARTS), "atLeast: the list of parts"),
-        isNull("atLeast part", () -> Structure.atLeast(1, NO_STRUCTURE, AB), "atLeast: a part"),
+        isNull("atLeast part", () -> Structure.atLeast(1, NO_STRUCTURE, AB), "atLeast: part 1"),
         isNull("paths", () -> Structure.ofPathSets(NO_SETS), "ofPathSets: the collection"),
         isNull("path set", () -> Structure.ofPathSets(nullSecond), "ofPathSets: set 2"),
         isNull("cuts", () -> Structure.ofCutSets(NO_SETS), "ofCutSets: the collection"),
@@ -103,6 +103,7 @@ class NullArgumentTest {
         isNull("most probable", () -> cuts.mostProbable(1, null), "probabilities"),
         isNull("set", () -> cuts.probability(null, Probabilities.all(0.5)), "set"),
         isNull("set", () -> cuts.probability(Set.of("a"), null), "probabilities"),
+        isNull("set member", () -> cuts.probability(nullMember, Probabilities.all(0.5)), "a name"),
         isNull("derivation", () -> Derivation.of(null), "structure"),
         isNull("derivation", () -> Derivation.of(AB, null), "budget"),
         isNull("derivation", () -> Derivation.of(AB).reliability(null), "probabilities"),
@@ -118,6 +119,7 @@ class NullArgumentTest {
 
   static Stream<BadCall> probabilities() {
     Map<String, Double> noNumber = Collections.singletonMap("a", null);
+    List<String> noName = Collections.singletonList(null);
     return Stream.of(
         isNull("all", () -> Probabilities.all(NO_PROBABILITY), "probability"),
         isNull("of", () -> Probabilities.of(null), "the map of probabilities"),
@@ -131,7 +133,11 @@ class NullArgumentTest {
         isNull("failing value", () -> Probabilities.failing(noNumber), "probability of \"a\""),
         isNull("with", () -> Probabilities.all(0.5).with("a", null), "probability of \"a\""),
         isNull("get", () -> Probabilities.all(0.5).get(null), "component"),
-        isNull("list", () -> Probabilities.all(0.5).forComponents(null), "list of components"));
+        isNull("covers", () -> Probabilities.all(0.5).covers(null), "component"),
+        isNull("covers", () -> Probabilities.of(Map.of()).covers(null), "component"),
+        isNull("list", () -> Probabilities.all(0.5).forComponents(null), "list of components"),
+        isNull("name", () -> Probabilities.all(0.5).forComponents(noName), "list of components"),
+        isNull("name", () -> Probabilities.of(Map.of()).forComponents(noName), "list of comp"));
   }
 
   @ParameterizedTest

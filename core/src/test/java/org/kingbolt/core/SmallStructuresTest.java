@@ -3,7 +3,6 @@ package org.kingbolt.core;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.kingbolt.core.testing.Close.assertReliability;
 
-import java.util.ArrayList;
 import java.util.HashSet;
 import java.util.List;
 import org.apache.commons.math3.fraction.BigFraction;
@@ -24,7 +23,7 @@ class SmallStructuresTest {
   void allMethods_agree(int order) {
     List<String> names = RandomStructures.NAMES.subList(0, order);
     int seen = 0;
-    for (int table : monotoneTables(order)) {
+    for (int table : TruthTable.monotone(order)) {
       Oracle oracle = new Oracle(names, TruthTable.of(order, state -> (table >>> state & 1) != 0));
       boolean constant = table == 0 || (table & 1) != 0;
       if (!constant && oracle.irrelevant().isEmpty()) {
@@ -56,22 +55,5 @@ class SmallStructuresTest {
     Probabilities rare = Probabilities.all(Probability.failing(1e-9));
     assertReliability(oracle, rare, system.reliability(rare), "diagram");
     assertReliability(oracle, rare, Derivation.of(structure).reliability(rare), "derivation");
-  }
-
-  /** Truth tables as masks; a function of n variables is a pair f <= g of functions of n - 1. */
-  private static List<Integer> monotoneTables(int order) {
-    List<Integer> tables = List.of(0, 1);
-    for (int n = 0; n < order; n++) {
-      List<Integer> next = new ArrayList<>();
-      for (int low : tables) {
-        for (int high : tables) {
-          if ((low & ~high) == 0) {
-            next.add(low | high << (1 << n));
-          }
-        }
-      }
-      tables = next;
-    }
-    return tables;
   }
 }

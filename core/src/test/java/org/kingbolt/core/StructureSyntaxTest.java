@@ -66,6 +66,7 @@ class StructureSyntaxTest {
   static Stream<Arguments> faultsInNames() {
     return Stream.of(
         arguments("\"  \"", 1, 1, "a name with at least one visible character"),
+        arguments("series(a, \"\u200b\")", 1, 11, "a name with at least one visible character"),
         arguments("a\nb", 2, 1, "the end of the text"),
         arguments("\"open", 1, 6, "a closing double quote for the name that begins at line 1"),
         arguments("series(a,\n \"b\n\"", 3, 2, MORE),
@@ -125,11 +126,19 @@ class StructureSyntaxTest {
   @Test
   void messageSaysWhatWasFound() {
     List<String> found =
-        Stream.of("series(a b)", "series(a", "series(a,)", "series(a; b)", "series(a \"b c\")")
+        Stream.of(
+                "series(a b)",
+                "series(a",
+                "series(a,)",
+                "series(a; b)",
+                "series(a \"b c\")",
+                "\"\\\ud83d\ude00\"")
             .map(text -> assertThrows(IllegalArgumentException.class, () -> Structure.parse(text)))
             .map(fault -> fault.getMessage().replaceFirst(".*, found ", ""))
             .toList();
-    assertEquals(List.of("\"b\"", "the end of the text", "')'", "';'", "\"b c\""), found);
+    assertEquals(
+        List.of("\"b\"", "the end of the text", "')'", "';'", "\"b c\"", "'\\\ud83d\ude00'"),
+        found);
   }
 
   static Stream<BadCall> refusedByTheMethodItNames() {

@@ -1,6 +1,8 @@
 package org.kingbolt.core;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertThrows;
+import static org.junit.jupiter.api.Assertions.assertTrue;
 import static org.junit.jupiter.params.provider.Arguments.arguments;
 
 import java.util.LinkedHashMap;
@@ -154,6 +156,8 @@ class StructureTextTest {
         arguments("e\u0301", "\"e\u0301\""),
         arguments("\u05d0\u200f1", "\"\u05d0\u200f1\""),
         arguments("half \ud83d", "\"half \\ud83d\""),
+        arguments("halves \ud83d\ud83d\ud83d", "\"halves \\ud83d\\ud83d\\ud83d\""),
+        arguments("half \ud83d\ud83d\ude00\ude00", "\"half \\ud83d\ud83d\ude00\\ude00\""),
         arguments("\ude00 half", "\"\\ude00 half\""));
   }
 
@@ -186,6 +190,26 @@ class StructureTextTest {
             + " network(arc(x, from, #), node(#, #), reachingAllFrom(from)))";
     assertEquals(pattern.replace("#", text), everywhere.toString());
     assertEquals(everywhere, Structure.parse(everywhere.toString()));
+  }
+
+  /** Sixty characters of a part are quoted; a smiling face takes two. */
+  @ParameterizedTest
+  @ValueSource(ints = {57, 58, 59, 60, 61})
+  void shortenedText_keepsPairsWhole(int before) {
+    String name = "a".repeat(before) + "\ud83d\ude00".repeat(9);
+    String message =
+        assertThrows(IllegalArgumentException.class, () -> Structure.series(name, name))
+            .getMessage();
+    assertTrue(message.contains("repeats part 1, \"" + "a".repeat(57)), message);
+    assertTrue(message.contains("..."), message);
+    assertEquals(
+        List.of(),
+        message
+            .codePoints()
+            .filter(c -> Character.getType(c) == Character.SURROGATE)
+            .boxed()
+            .toList(),
+        message);
   }
 
   @Test

@@ -26,7 +26,10 @@ public final class Importance {
    * @throws org.kingbolt.core.BudgetExceededException if the structure is too large to compile
    */
   public static Importance of(Structure structure) {
-    return of(Objects.requireNonNull(structure, "structure is null").compile());
+    return of(
+        Objects.requireNonNull(
+                structure, "structure is null; give a structure, or a system compiled from one")
+            .compile());
   }
 
   /**
@@ -36,7 +39,9 @@ public final class Importance {
    * @return a start for questions
    */
   public static Importance of(CoherentSystem system) {
-    return new Importance(Objects.requireNonNull(system, "system is null"));
+    return new Importance(
+        Objects.requireNonNull(
+            system, "system is null; give a compiled system, or a structure to compile"));
   }
 
   /**
@@ -64,7 +69,10 @@ public final class Importance {
    * @throws IllegalArgumentException if components have no probability; the message lists them
    */
   public ImportanceAtProbabilities given(Probabilities p) {
-    Objects.requireNonNull(p, "probabilities are null").forComponents(system.components());
+    Objects.requireNonNull(
+            p,
+            "probabilities are null; give those of all components, such as Probabilities.all(0.9)")
+        .forComponents(system.components());
     return new ImportanceAtProbabilities(system, p);
   }
 

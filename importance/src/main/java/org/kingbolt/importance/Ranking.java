@@ -9,6 +9,7 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Objects;
+import java.util.stream.Collectors;
 import java.util.stream.IntStream;
 
 /**
@@ -24,6 +25,9 @@ import java.util.stream.IntStream;
 public final class Ranking {
 
   private static final double TIED = 1e-12;
+
+  /** How many components a message names. */
+  private static final int SHOWN = 12;
 
   /**
    * One line of a ranking.
@@ -42,7 +46,7 @@ public final class Ranking {
      * @param value the measure's value
      */
     public Entry {
-      Objects.requireNonNull(component, "component is null");
+      Objects.requireNonNull(component, "component is null; give its name");
     }
   }
 
@@ -99,12 +103,27 @@ public final class Ranking {
    * @throws IllegalArgumentException if the system has no such component
    */
   public double value(String component) {
-    Double value = byComponent.get(Objects.requireNonNull(component, "component is null"));
+    Double value =
+        byComponent.get(
+            Objects.requireNonNull(component, "component is null; give the name of one ranked"));
     if (value == null) {
       throw new IllegalArgumentException(
-          "unknown component \"" + component + "\"; the ranking holds " + byComponent.keySet());
+          "unknown component \""
+              + component
+              + "\"; the ranking holds "
+              + known()
+              + "; name one of these");
     }
     return value;
+  }
+
+  /** The first few components, quoted, and how many more there are. */
+  private String known() {
+    int more = entries.size() - SHOWN;
+    return top(SHOWN).stream()
+            .map(entry -> "\"" + entry.component + "\"")
+            .collect(Collectors.joining(", "))
+        + (more > 0 ? " and " + more + " more" : "");
   }
 
   /**

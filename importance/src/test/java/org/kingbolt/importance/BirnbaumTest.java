@@ -6,6 +6,7 @@ import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.math.BigDecimal;
+import java.util.Arrays;
 import java.util.List;
 import java.util.Map;
 import net.jqwik.api.Arbitrary;
@@ -13,6 +14,8 @@ import net.jqwik.api.ForAll;
 import net.jqwik.api.Property;
 import net.jqwik.api.Provide;
 import org.junit.jupiter.api.Test;
+import org.junit.jupiter.api.function.Executable;
+import org.kingbolt.core.CoherentSystem;
 import org.kingbolt.core.Probabilities;
 import org.kingbolt.core.Probability;
 import org.kingbolt.core.Structure;
@@ -113,10 +116,42 @@ class BirnbaumTest {
     Ranking ranking = Importance.of(pair).structural();
     IllegalArgumentException unknown =
         assertThrows(IllegalArgumentException.class, () -> ranking.value("pumpC"));
-    assertTrue(unknown.getMessage().contains("\"pumpC\""), unknown.getMessage());
+    assertEquals(
+        "unknown component \"pumpC\"; the ranking holds \"pumpA\", \"pumpB\"; name one of these",
+        unknown.getMessage());
     assertThrows(IllegalArgumentException.class, () -> ranking.top(-1));
-    assertThrows(NullPointerException.class, () -> ranking.value(null));
-    assertThrows(NullPointerException.class, () -> Importance.of((Structure) null));
-    assertThrows(NullPointerException.class, () -> Importance.of(pair).given(null));
+  }
+
+  @Test
+  void unknownComponent_amongMany() {
+    String[] names = new String[1000];
+    Arrays.setAll(names, i -> "u" + i);
+    Ranking ranking = Importance.of(Structure.series(names)).structural();
+    String message =
+        assertThrows(IllegalArgumentException.class, () -> ranking.value("x")).getMessage();
+    assertTrue(message.contains("\"u0\", \"u1\""), message);
+    assertTrue(message.contains("\"u11\" and 988 more; name one of these"), message);
+  }
+
+  private static void assertNullRefused(String message, Executable call) {
+    assertEquals(message, assertThrows(NullPointerException.class, call).getMessage());
+  }
+
+  @Test
+  void nullArguments_areNamed() {
+    Structure pair = Structure.series("a", "b");
+    assertNullRefused(
+        "structure is null; give a structure, or a system compiled from one",
+        () -> Importance.of((Structure) null));
+    assertNullRefused(
+        "system is null; give a compiled system, or a structure to compile",
+        () -> Importance.of((CoherentSystem) null));
+    assertNullRefused(
+        "probabilities are null; give those of all components, such as Probabilities.all(0.9)",
+        () -> Importance.of(pair).given(null));
+    assertNullRefused(
+        "component is null; give the name of one ranked",
+        () -> Importance.of(pair).structural().value(null));
+    assertNullRefused("component is null; give its name", () -> new Ranking.Entry(1, null, 0.5));
   }
 }

@@ -59,8 +59,7 @@ final class FrontierBeam {
   private final List<int[]> origin = new ArrayList<>();
   private List<Partial> partials = new ArrayList<>();
 
-  private FrontierBeam(
-      int[][] neighbours, int[] nodes, boolean[] pair, int beam, WorkMeter meter) {
+  private FrontierBeam(int[][] neighbours, int[] nodes, boolean[] pair, int beam, WorkMeter meter) {
     this.pair = pair;
     this.meter = meter;
     this.neighbours = neighbours;
@@ -120,7 +119,10 @@ final class FrontierBeam {
           if (!partial.has(node) && seenBy[node] != i + 1) {
             seenBy[node] = i + 1;
             meter.at(steps.size());
-            double cost = partial.cost + FrontierOrder.cost(widthAfter(partial, node), partial.met + (pair[node] ? 1 : 0));
+            double cost =
+                partial.cost
+                    + FrontierOrder.cost(
+                        widthAfter(partial, node), partial.met + (pair[node] ? 1 : 0));
             steps.add(new Step(i, node, cost, partial.hash ^ label[node]));
           }
         }

@@ -12,7 +12,21 @@ import java.math.BigInteger;
  */
 public final class StateCounts {
 
-  private StateCounts() {}
+  /** From so many free variables on, a power is multiplied. */
+  private static final int FEW = 8;
+
+  private final int block;
+
+  /** 1 + x. */
+  private final BigInteger factor;
+
+  private int lastExponent;
+  private BigInteger lastPower = BigInteger.ONE;
+
+  private StateCounts(int block) {
+    this.block = block;
+    this.factor = BigInteger.ONE.add(BigInteger.ONE.shiftLeft(block));
+  }
 
   /**
    * Counts working states by number of working variables.
@@ -23,8 +37,11 @@ public final class StateCounts {
    *     working
    */
   public static BigInteger[] workingBySize(Diagram diagram, WorkMeter meter) {
+    return new StateCounts(diagram.levels() + 1).bySize(diagram, meter);
+  }
+
+  private BigInteger[] bySize(Diagram diagram, WorkMeter meter) {
     int levels = diagram.levels();
-    int block = levels + 1;
     long nodesPerNumber = 1 + (long) block * block / 8 / WorkMeter.BYTES_PER_NODE;
     BigInteger[] count = new BigInteger[diagram.size()];
     count[Diagram.FAILS] = BigInteger.ZERO;
@@ -32,14 +49,13 @@ public final class StateCounts {
     int[] levelOf = levels(diagram);
     for (int level = levels - 1; level >= 0; level--) {
       for (int id = diagram.from(level); id < diagram.to(level); id++) {
-        meter.at(id * nodesPerNumber);
-        BigInteger low = free(count[diagram.low(id)], levelOf[diagram.low(id)] - level - 1, block);
-        BigInteger high =
-            free(count[diagram.high(id)], levelOf[diagram.high(id)] - level - 1, block);
+        meter.now(id * nodesPerNumber);
+        BigInteger low = free(count[diagram.low(id)], levelOf[diagram.low(id)] - level - 1);
+        BigInteger high = free(count[diagram.high(id)], levelOf[diagram.high(id)] - level - 1);
         count[id] = low.add(high.shiftLeft(block));
       }
     }
-    BigInteger all = free(count[diagram.root()], levelOf[diagram.root()], block);
+    BigInteger all = free(count[diagram.root()], levelOf[diagram.root()]);
     BigInteger[] bySize = new BigInteger[levels + 1];
     BigInteger mask = BigInteger.ONE.shiftLeft(block).subtract(BigInteger.ONE);
     for (int size = 0; size <= levels; size++) {
@@ -49,15 +65,32 @@ public final class StateCounts {
   }
 
   /** Lets a number of variables vary freely: times (1 + x) for each. */
-  private static BigInteger free(BigInteger counts, int variables, int block) {
-    if (counts.signum() == 0) {
+  private BigInteger free(BigInteger counts, int variables) {
+    if (counts.signum() == 0 || variables == 0) {
       return counts;
+    }
+    if (counts.equals(BigInteger.ONE)) {
+      return powers(variables);
+    }
+    if (variables > FEW) {
+      return counts.multiply(factor.pow(variables));
     }
     BigInteger result = counts;
     for (int i = 0; i < variables; i++) {
       result = result.add(result.shiftLeft(block));
     }
     return result;
+  }
+
+  /** (1 + x) to some power. Going up the levels asks for ever higher powers, one by one. */
+  private BigInteger powers(int exponent) {
+    if (exponent < lastExponent) {
+      return factor.pow(exponent);
+    }
+    for (; lastExponent < exponent; lastExponent++) {
+      lastPower = lastPower.add(lastPower.shiftLeft(block));
+    }
+    return lastPower;
   }
 
   private static int[] levels(Diagram diagram) {

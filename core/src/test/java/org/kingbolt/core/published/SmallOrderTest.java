@@ -14,6 +14,7 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.kingbolt.core.CoherentSystem;
 import org.kingbolt.core.Structure;
+import org.kingbolt.core.testing.TruthTable;
 
 /** Coherent systems of few components: how many there are, and their signatures. */
 class SmallOrderTest {
@@ -103,7 +104,7 @@ class SmallOrderTest {
   /** Every monotone function of so many variables, compiled; kept where all components matter. */
   private static List<CoherentSystem> coherentSystems(int order) {
     List<CoherentSystem> systems = new ArrayList<>();
-    for (int table : monotoneTables(order)) {
+    for (int table : TruthTable.monotone(order)) {
       List<Set<String>> paths = new ArrayList<>();
       for (int state = 1; state < 1 << order; state++) {
         if ((table >>> state & 1) != 0) {
@@ -119,23 +120,6 @@ class SmallOrderTest {
       }
     }
     return systems;
-  }
-
-  /** Truth tables as masks; a function of n variables is a pair f <= g of functions of n - 1. */
-  private static List<Integer> monotoneTables(int order) {
-    List<Integer> tables = List.of(0, 1);
-    for (int n = 0; n < order; n++) {
-      List<Integer> next = new ArrayList<>();
-      for (int low : tables) {
-        for (int high : tables) {
-          if ((low & ~high) == 0) {
-            next.add(low | high << (1 << n));
-          }
-        }
-      }
-      tables = next;
-    }
-    return tables;
   }
 
   private static Set<String> set(int mask) {

@@ -128,17 +128,6 @@ public enum TooLarge {
       tree.compile();
     }
   },
-  LARGE_SETS("compiling the structure") {
-    @Override
-    void ask() {
-      List<List<String>> sets = new ArrayList<>();
-      String[] names = names(20_000);
-      for (int i = 0; i + 1 < names.length; i++) {
-        sets.add(List.of(names[i], names[names.length - 1 - i / 2]));
-      }
-      Structure.ofPathSets(sets).compile();
-    }
-  },
   DERIVATION("deriving the formula") {
     @Override
     void ask() {

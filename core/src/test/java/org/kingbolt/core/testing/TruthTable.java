@@ -1,5 +1,6 @@
 package org.kingbolt.core.testing;
 
+import java.util.ArrayList;
 import java.util.BitSet;
 import java.util.List;
 import java.util.function.IntPredicate;
@@ -83,5 +84,27 @@ public record TruthTable(int components, BitSet working) {
   boolean isConstant() {
     int states = working.cardinality();
     return states == 0 || states == 1 << components;
+  }
+
+  /**
+   * All monotone functions: a function of n variables is a pair f &lt;= g of functions of n - 1.
+   *
+   * @param order the number of variables, at most 5
+   * @return truth tables as masks, bit x of which is the value in state x
+   */
+  public static List<Integer> monotone(int order) {
+    List<Integer> tables = List.of(0, 1);
+    for (int n = 0; n < order; n++) {
+      List<Integer> next = new ArrayList<>();
+      for (int low : tables) {
+        for (int high : tables) {
+          if ((low & ~high) == 0) {
+            next.add(low | high << (1 << n));
+          }
+        }
+      }
+      tables = next;
+    }
+    return tables;
   }
 }

@@ -7,6 +7,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.function.Supplier;
 import org.kingbolt.core.CoherentSystem;
+import org.kingbolt.core.Evaluator;
 import org.kingbolt.core.Probabilities;
 import org.kingbolt.core.Structure;
 import org.kingbolt.core.diagram.Diagram;
@@ -85,7 +86,17 @@ final class GateRows {
 
   private static Prepared evaluated(int components) {
     CoherentSystem system = UnsharedGates.of(components, 1).compile();
+    double[] working = new double[components];
+    Arrays.fill(working, 0.9);
+    Evaluator evaluator = system.evaluator();
     return new Prepared(
-        components, "components", "failing", () -> system.reliability(0.9).failing(), Map.of());
+        components,
+        "components",
+        "failing",
+        () -> {
+          evaluator.evaluate(working);
+          return evaluator.failing();
+        },
+        Map.of());
   }
 }

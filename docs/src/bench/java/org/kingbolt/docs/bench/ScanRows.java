@@ -1,11 +1,14 @@
 package org.kingbolt.docs.bench;
 
 import java.util.ArrayList;
+import java.util.Comparator;
 import java.util.List;
 import java.util.Map;
 import java.util.function.Supplier;
 import java.util.stream.DoubleStream;
+import org.kingbolt.core.BatchResult;
 import org.kingbolt.core.CoherentSystem;
+import org.kingbolt.core.Evaluator;
 import org.kingbolt.core.Probabilities;
 import org.kingbolt.core.published.Topology;
 
@@ -22,9 +25,13 @@ final class ScanRows {
     for (int[] grid : grids) {
       String name = grid[0] + "x" + grid[1] + " grid: ";
       rows.add(row(name + "evaluate", () -> scanned(grid[0], grid[1], false)));
-      rows.add(row(name + "derivatives", () -> scanned(grid[0], grid[1], true)));
+      rows.add(row(name + "evaluate, derivatives", () -> scanned(grid[0], grid[1], true)));
     }
-    rows.add(row("IEEE 118-bus: 1000 vectors", ScanRows::batch));
+    rows.add(row("7x26 grid: derivatives, every digit", () -> everyDigit(7, 26)));
+    rows.add(row("IEEE 118-bus: 1000 vectors, 1 thread", () -> batch("ieee118", 1)));
+    rows.add(row("IEEE 118-bus: 1000 vectors, 2 threads", () -> batch("ieee118", 2)));
+    rows.add(row("IEEE 300-bus: 1000 vectors, 1 thread", () -> batch("ieee300", 1)));
+    rows.add(row("IEEE 300-bus: 1000 vectors, 2 threads", () -> batch("ieee300", 2)));
     return rows;
   }
 
@@ -36,39 +43,73 @@ final class ScanRows {
     CoherentSystem system =
         Inputs.grid(width, length).connecting(Inputs.corners(width, length)).compile();
     double[] failing = Inputs.failing(system.components().size(), 0.01, 0.05);
+    double[] working = complement(failing);
+    PlainLoop loop = new PlainLoop(system.diagram());
+    double[] byLevel = Inputs.byLevel(failing, system.diagram());
+    Evaluator evaluator = system.evaluator();
+    double[] out = new double[failing.length];
+    return new Prepared(
+        system.diagram().nodeCount(),
+        "nodes",
+        derivatives ? "sum of derivatives" : "failing",
+        () -> {
+          evaluator.evaluate(working, failing);
+          if (derivatives) {
+            evaluator.derivatives(out);
+            return DoubleStream.of(out).sum();
+          }
+          return evaluator.failing();
+        },
+        Map.of(LOOP, () -> derivatives ? loop.derivatives(byLevel) : loop.fails(byLevel)));
+  }
+
+  private static Prepared everyDigit(int width, int length) {
+    CoherentSystem system =
+        Inputs.grid(width, length).connecting(Inputs.corners(width, length)).compile();
+    double[] failing = Inputs.failing(system.components().size(), 0.01, 0.05);
     Probabilities p = Inputs.probabilities(system.components(), failing);
     PlainLoop loop = new PlainLoop(system.diagram());
     double[] byLevel = Inputs.byLevel(failing, system.diagram());
     return new Prepared(
         system.diagram().nodeCount(),
         "nodes",
-        derivatives ? "sum of derivatives" : "failing",
-        derivatives
-            ? () -> DoubleStream.of(system.evaluation(p).derivatives()).sum()
-            : () -> system.evaluation(p).fails(),
-        Map.of(LOOP, () -> derivatives ? loop.derivatives(byLevel) : loop.fails(byLevel)));
+        "sum of derivatives",
+        () -> DoubleStream.of(system.evaluation(p).derivatives()).sum(),
+        Map.of(LOOP, () -> loop.derivatives(byLevel)));
   }
 
-  private static Prepared batch() {
-    CoherentSystem system = Topology.file("ieee118").connecting("1", "118").compile();
+  private static double[] complement(double[] failing) {
+    return DoubleStream.of(failing).map(q -> 1 - q).toArray();
+  }
+
+  private static Prepared batch(String network, int threads) {
+    Topology topology = Topology.file(network);
+    String last =
+        topology.nodes().stream().max(Comparator.comparingInt(Integer::parseInt)).orElseThrow();
+    CoherentSystem system = topology.connecting("1", last).compile();
     PlainLoop loop = new PlainLoop(system.diagram());
-    List<Probabilities> vectors = new ArrayList<>();
+    double[][] failing = new double[1000][];
+    double[][] working = new double[1000][];
     List<double[]> plain = new ArrayList<>();
-    for (int vector = 0; vector < 1000; vector++) {
+    for (int vector = 0; vector < failing.length; vector++) {
       double most = 0.01 + 1e-5 * vector;
-      double[] failing = Inputs.failing(system.components().size(), 0.001, most);
-      vectors.add(Inputs.probabilities(system.components(), failing));
-      plain.add(Inputs.byLevel(failing, system.diagram()));
+      failing[vector] = Inputs.failing(system.components().size(), 0.001, most);
+      working[vector] = complement(failing[vector]);
+      plain.add(Inputs.byLevel(failing[vector], system.diagram()));
     }
+    Evaluator evaluator = system.evaluator();
     return new Prepared(
-        vectors.size(),
-        "vectors",
+        failing.length * (long) system.diagram().nodeCount(),
+        "nodes × vectors",
         "failing in all",
-        () -> failingInAll(system, vectors),
+        () -> {
+          BatchResult results = evaluator.evaluateBatch(working, failing, threads);
+          double sum = 0;
+          for (int vector = 0; vector < results.size(); vector++) {
+            sum += results.failing(vector);
+          }
+          return sum;
+        },
         Map.of(LOOP, () -> plain.stream().mapToDouble(loop::fails).sum()));
-  }
-
-  private static double failingInAll(CoherentSystem system, List<Probabilities> vectors) {
-    return vectors.stream().mapToDouble(p -> system.evaluation(p).fails()).sum();
   }
 }
