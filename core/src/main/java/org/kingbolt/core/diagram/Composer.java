@@ -253,7 +253,11 @@ public final class Composer {
    * @return the reduced diagram over all variables; those never used come last in the order
    */
   public Diagram compose(int root, WorkMeter meter) {
-    Untangling.of(this, root, meter);
+    double nodes = Untangling.of(this, root, meter);
+    meter.at((long) nodes);
+    if (nodes > UniqueTable.LARGEST_SIZE) {
+      throw new IllegalStateException("more than " + UniqueTable.LARGEST_SIZE + " nodes");
+    }
     return new Concatenation(this, meter).diagram(root);
   }
 

@@ -65,7 +65,6 @@ final class Concatenation {
   private void order(int root) {
     Arrays.fill(level, -1);
     int levels = 0;
-    long nodes = 0;
     int[] open = new int[64];
     int[] times = new int[64];
     int count = 1;
@@ -79,11 +78,6 @@ final class Concatenation {
         level[variable] = levels;
         bound[levels] = multiple;
         variableAtLevel[levels++] = variable;
-        nodes += multiple;
-        meter.at(nodes);
-        if (nodes > UniqueTable.LARGEST_SIZE) {
-          throw new IllegalStateException("more than " + UniqueTable.LARGEST_SIZE + " nodes");
-        }
         continue;
       }
       Diagram template = composer.operatorOf(expression).template(meter);
@@ -93,7 +87,7 @@ final class Concatenation {
       }
       for (int l = template.levels() - 1; l >= 0; l--) {
         open[count] = composer.partAt(expression, l);
-        times[count++] = Math.multiplyExact(multiple, template.to(l) - template.from(l));
+        times[count++] = multiple * (template.to(l) - template.from(l));
       }
     }
     for (int variable = 0; variable < level.length; variable++) {

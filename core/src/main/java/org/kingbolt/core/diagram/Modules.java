@@ -15,6 +15,7 @@ import java.util.Arrays;
 final class Modules {
 
   private final Composer composer;
+  private final int root;
 
   /** First and last visit to each expression; 0 where there is none. */
   private final int[] first;
@@ -25,12 +26,13 @@ final class Modules {
 
   Modules(Composer composer, int root) {
     this.composer = composer;
+    this.root = root;
     this.first = new int[root + 1];
     this.last = new int[root + 1];
     this.module = new boolean[root + 1];
     this.single = new boolean[root + 1];
     int[] closing = new int[root + 1];
-    visit(root, closing);
+    visit(closing);
     for (int expression = 0; expression <= root; expression++) {
       if (first[expression] > 0) {
         judge(expression, closing[expression]);
@@ -38,7 +40,7 @@ final class Modules {
     }
   }
 
-  private void visit(int root, int[] closing) {
+  private void visit(int[] closing) {
     int[] open = new int[64];
     int[] nextLevel = new int[64];
     int depth = 0;
@@ -76,13 +78,17 @@ final class Modules {
       earliest = Math.min(earliest, first[part]);
       latest = Math.max(latest, last[part]);
     }
-    module[expression] = first[expression] < earliest && latest < closing;
+    boolean reads = composer.isLeaf(expression) || composer.levels(expression) > 0;
+    module[expression] =
+        first[expression] < earliest && latest < closing && (reads || expression == root);
     single[expression] = module[expression] && first[expression] == last[expression];
     first[expression] = Math.min(first[expression], earliest);
     last[expression] = Math.max(last[expression], latest);
   }
 
-  /** Whether nothing outside of the expression uses what it uses; true for a leaf. */
+  /**
+   * Whether nothing outside uses what the expression uses; true for a leaf, false for a constant.
+   */
   boolean isModule(int expression) {
     return module[expression];
   }

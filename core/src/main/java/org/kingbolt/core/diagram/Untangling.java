@@ -12,7 +12,7 @@ final class Untangling {
   private final int[] place;
 
   /** The number of nodes that each module is going to have. */
-  private double[] size;
+  private final double[] size;
 
   /** Nodes of the diagrams put in. */
   private long kept;
@@ -32,8 +32,9 @@ final class Untangling {
     }
   }
 
-  static void of(Composer composer, int root, WorkMeter meter) {
-    new Untangling(composer, root, meter);
+  /** Does it, and returns the number of nodes of the whole. */
+  static double of(Composer composer, int root, WorkMeter meter) {
+    return new Untangling(composer, root, meter).size[root];
   }
 
   private void settle(int module) {

@@ -54,6 +54,21 @@ class ModulesTest {
     assertFalse(diagram.works(new boolean[] {false, true}));
   }
 
+  /** An operator without slots is no module, so that what it settles is simplified away. */
+  @Test
+  void constantPart_leavesNoNodeThatDoesNotMatter() {
+    int works = composer.all(new int[] {});
+    int root = composer.all(new int[] {works, composer.any(new int[] {leaf(0), leaf(1)})});
+    assertEquals(2, composer.compose(root, WorkMeter.UNLIMITED).nodeCount());
+    Composer other = new Composer(2);
+    int[] parts = {other.variable(0), other.all(new int[] {}), other.variable(1)};
+    int any = other.any(parts);
+    double[] direct =
+        other.expect(any, new double[] {0.5, 0.5}, new double[] {0.5, 0.5}, WorkMeter.UNLIMITED);
+    assertEquals(1, direct[0]);
+    assertEquals(Diagram.WORKS, other.compose(any, WorkMeter.UNLIMITED).root());
+  }
+
   /** Calls of the meter stand for the work, however fast the machine is. */
   @ParameterizedTest
   @ValueSource(booleans = {true, false})
