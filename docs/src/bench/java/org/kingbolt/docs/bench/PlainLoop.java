@@ -1,20 +1,26 @@
 package org.kingbolt.docs.bench;
 
+import java.util.Arrays;
 import org.kingbolt.core.diagram.Diagram;
 
-/** What anyone would write: one tail of one vector, level by level over arrays. */
+/** What anyone would write: one tail of one vector, level by level, in arrays made once. */
 final class PlainLoop {
 
   private final int root;
   private final int[] low;
   private final int[] high;
   private final int[] ends;
+  private final double[] fails;
+  private final double[] reach;
 
   PlainLoop(Diagram diagram) {
     root = diagram.root();
     low = new int[diagram.size()];
     high = new int[diagram.size()];
     ends = new int[diagram.levels()];
+    fails = new double[diagram.size()];
+    fails[Diagram.FAILS] = 1;
+    reach = new double[diagram.size()];
     for (int id = 2; id < low.length; id++) {
       low[id] = diagram.low(id);
       high[id] = diagram.high(id);
@@ -25,12 +31,6 @@ final class PlainLoop {
   }
 
   double fails(double[] failingByLevel) {
-    return values(failingByLevel)[root];
-  }
-
-  private double[] values(double[] failingByLevel) {
-    double[] fails = new double[low.length];
-    fails[Diagram.FAILS] = 1;
     int id = 2;
     for (int level = ends.length - 1; level >= 0; level--) {
       double q = failingByLevel[level];
@@ -39,13 +39,13 @@ final class PlainLoop {
         fails[id] = p * fails[high[id]] + q * fails[low[id]];
       }
     }
-    return fails;
+    return fails[root];
   }
 
   /** The sum of all derivatives, each as a plain difference. */
   double derivatives(double[] failingByLevel) {
-    double[] fails = values(failingByLevel);
-    double[] reach = new double[low.length];
+    fails(failingByLevel);
+    Arrays.fill(reach, 0);
     double sum = 0;
     reach[root] = 1;
     int id = root;
