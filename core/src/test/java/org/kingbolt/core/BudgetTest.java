@@ -365,4 +365,27 @@ class BudgetTest {
     assertEquals(Budget.ofNodes(1_000), budget);
     assertEquals(0.99, Structure.parallel("a", "b").compile(budget).reliability(0.9).working());
   }
+
+  /** Wide operators, one inside the other: their sizes multiply past any int. */
+  @Test
+  void nestedWideOperators_endInTheirBudget() {
+    Structure nested = scattered("a", 1).replace("a20", scattered("b", 2));
+    BudgetExceededException tooLarge =
+        assertThrows(
+            BudgetExceededException.class, () -> nested.compile(Budget.ofNodes(45_000_000)));
+    assertEquals(NODES, tooLarge.limit());
+  }
+
+  /** Forty capacities with few equal sums. */
+  private static Structure scattered(String prefix, long seed) {
+    Random random = new Random(seed);
+    Map<String, Long> capacities = new LinkedHashMap<>();
+    long sum = 0;
+    for (int i = 0; i < 40; i++) {
+      long capacity = 1L + random.nextInt(1 << 16);
+      capacities.put(prefix + i, capacity);
+      sum += capacity;
+    }
+    return Structure.capacityAtLeast(sum / 2, capacities);
+  }
 }

@@ -98,8 +98,7 @@ public final class Composer {
   int sweep(NetworkProblem network, boolean dual, int[] slotParts, WorkMeter meter) {
     FrontierPlan plan = new FrontierPlan(network, meter);
     widest = Math.max(widest, plan.width());
-    StateRule rule = network.directed ? new DirectedRule(plan) : new UndirectedRule(plan);
-    Operator operator = Operator.swept(rule);
+    Operator operator = Operator.swept(plan.rule());
     return operator(dual ? Operator.dual(operator) : operator, slotParts);
   }
 

@@ -42,26 +42,34 @@ final class FrontierOrder {
   private final NetworkProblem problem;
   private final int[][] linksAt;
   private final WorkMeter meter;
-  private double cost;
+
+  /** Whether there is one target only; the block of either terminal is then one of many. */
+  private final boolean isPair;
 
   private FrontierOrder(NetworkProblem problem, WorkMeter meter) {
     this.problem = problem;
     this.meter = meter;
     this.linksAt = problem.linksAt();
+    int targets = 0;
+    for (boolean isTarget : problem.target) {
+      targets += isTarget ? 1 : 0;
+    }
+    this.isPair = targets == 1;
   }
 
   /** The nodes connected with the source, in sweeping order. */
   static int[] best(NetworkProblem problem, WorkMeter meter) {
     FrontierOrder search = new FrontierOrder(problem, meter);
     int[] best = search.sweepFrom(problem.source);
-    double bestCost = search.cost;
+    double bestCost = search.costOf(best, false);
     int[] reached = best.clone();
     Arrays.sort(reached);
     int stride = Math.max(1, reached.length / STARTS);
     for (int i = 0; i < reached.length; i += stride) {
       int[] order = search.sweepFrom(reached[i]);
-      if (search.cost < bestCost) {
-        bestCost = search.cost;
+      double cost = search.costOf(order, false);
+      if (cost < bestCost) {
+        bestCost = cost;
         best = order;
       }
     }
@@ -82,7 +90,7 @@ final class FrontierOrder {
     boolean[] pair = pair();
     int[] blind = FrontierBeam.order(neighbours, reached, new boolean[pair.length], beam, meter);
     int[] best = costOf(blind, false) < costOf(greedy, false) ? blind : greedy;
-    if (isPair()) {
+    if (isPair) {
       int[] aware = FrontierBeam.order(neighbours, reached, pair, beam, meter);
       boolean narrow = costOf(aware, false) <= AS_NARROW * costOf(best, false);
       return narrow && costOf(aware, true) < costOf(best, true) ? aware : best;
@@ -130,7 +138,7 @@ final class FrontierOrder {
     }
     double sum = 0;
     int width = 0;
-    int met = minding && isPair() ? 0 : -1;
+    int met = minding && isPair ? 0 : -1;
     for (int node : order) {
       swept[node] = true;
       int links = 0;
@@ -151,22 +159,13 @@ final class FrontierOrder {
   /** The two terminals of a pair as a set of nodes, or nothing. */
   private boolean[] pair() {
     boolean[] pair = new boolean[problem.nodes()];
-    for (int node = 0; node < pair.length && isPair(); node++) {
-      pair[node] = problem.terminal(node);
+    for (int node = 0; node < pair.length; node++) {
+      pair[node] = isPair && problem.terminal(node);
     }
     return pair;
   }
 
-  /** Whether there is one target only; the block of either terminal is then one of many. */
-  private boolean isPair() {
-    int targets = 0;
-    for (boolean isTarget : problem.target) {
-      targets += isTarget ? 1 : 0;
-    }
-    return targets == 1;
-  }
-
-  /** Greedy sweep; leaves its estimated cost in {@link #cost}. */
+  /** Greedy sweep. */
   private int[] sweepFrom(int start) {
     int nodes = problem.nodes();
     int[] order = new int[nodes];
@@ -192,9 +191,7 @@ final class FrontierOrder {
       }
       next = cheapestNeighbour(order, oldest, placed, position, unplaced);
     }
-    int[] sweep = Arrays.copyOf(order, placed);
-    cost = costOf(sweep, false);
-    return sweep;
+    return Arrays.copyOf(order, placed);
   }
 
   /** The unplaced neighbour that widens the frontier least; among equals, of the oldest node. */

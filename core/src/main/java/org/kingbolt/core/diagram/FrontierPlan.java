@@ -69,6 +69,11 @@ final class FrontierPlan {
     followFrontier();
   }
 
+  /** The rule that follows this plan. */
+  StateRule rule() {
+    return problem.directed ? new DirectedRule(this) : new UndirectedRule(this);
+  }
+
   /** Each link when the later of its two nodes is met, links to earlier nodes first. */
   private static int[] linksInOrder(NetworkProblem problem, int[] nodeOrder) {
     int[] position = new int[problem.nodes()];

@@ -23,8 +23,6 @@ public final class FrontierSweep {
    * @throws FrontierTooWideException if no order was found whose states can be packed
    */
   public static Diagram template(NetworkProblem problem, WorkMeter meter) {
-    FrontierPlan plan = new FrontierPlan(problem, meter);
-    StateRule rule = problem.directed ? new DirectedRule(plan) : new UndirectedRule(plan);
-    return StateSweep.template(rule, meter);
+    return StateSweep.template(new FrontierPlan(problem, meter).rule(), meter);
   }
 }
