@@ -9,6 +9,7 @@ import java.util.function.Supplier;
 import org.kingbolt.core.diagram.Composer;
 import org.kingbolt.core.diagram.Diagram;
 import org.kingbolt.core.diagram.FrontierTooWideException;
+import org.kingbolt.core.diagram.NetworkRelaxer;
 import org.kingbolt.core.diagram.WorkMeter;
 
 /** From a structure to the engine's expression, and on to a diagram. */
@@ -35,6 +36,24 @@ final class Compilation {
     p.fill(components, working, failing);
     double[] both = within(() -> expression(numbering, meter).expect(working, failing, meter));
     return Probability.computed(both[0], both[1]);
+  }
+
+  /**
+   * The probability of a structure that works less often, or more often, than this one.
+   *
+   * @param relaxer chooses for the networks
+   * @param effort how many nodes a diagram may have
+   */
+  static double[] oneSided(
+      Numbering numbering,
+      NetworkRelaxer relaxer,
+      double[] working,
+      double[] failing,
+      long effort,
+      WorkMeter meter) {
+    Composer composer = new Composer(0);
+    composer.relax(relaxer);
+    return within(() -> expression(numbering, composer, meter).expect(working, failing, meter));
   }
 
   static int widestFrontier(Structure structure) {
@@ -110,7 +129,10 @@ final class Compilation {
   }
 
   private static Expression expression(Numbering numbering, WorkMeter meter) {
-    Composer composer = new Composer(0);
+    return expression(numbering, new Composer(0), meter);
+  }
+
+  private static Expression expression(Numbering numbering, Composer composer, WorkMeter meter) {
     int[] made = new int[numbering.size()];
     int components = 0;
     for (int number = 0; number < made.length; number++) {

@@ -2,6 +2,7 @@ package org.kingbolt.core.diagram;
 
 import java.util.Arrays;
 import java.util.function.IntUnaryOperator;
+import org.jspecify.annotations.Nullable;
 
 /**
  * Puts templates together: an expression of operators over variables becomes one reduced diagram.
@@ -26,6 +27,7 @@ public final class Composer {
 
   private int count;
   private int widest;
+  private @Nullable NetworkRelaxer relaxer;
 
   /** What each operator does. */
   private Operator[] operators = new Operator[16];
@@ -94,8 +96,20 @@ public final class Composer {
     return new NetworkReducer(this, network, dual, slotParts, meter).expression();
   }
 
+  /**
+   * Replaces the networks added from now on.
+   *
+   * @param newRelaxer says by what
+   */
+  public void relax(NetworkRelaxer newRelaxer) {
+    relaxer = newRelaxer;
+  }
+
   /** Adds a network that no reduction takes apart. */
   int sweep(NetworkProblem network, boolean dual, int[] slotParts, WorkMeter meter) {
+    if (relaxer != null && !relaxer.isBusy()) {
+      return relaxer.sweep(this, network, dual, slotParts, meter);
+    }
     FrontierPlan plan = new FrontierPlan(network, meter);
     widest = Math.max(widest, plan.width());
     Operator operator = Operator.swept(plan.rule());

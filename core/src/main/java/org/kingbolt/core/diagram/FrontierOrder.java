@@ -57,6 +57,32 @@ final class FrontierOrder {
     this.isPair = targets == 1;
   }
 
+  /** The width of the frontier in a first greedy order. */
+  static int firstWidth(NetworkProblem problem, WorkMeter meter) {
+    FrontierOrder search = new FrontierOrder(problem, meter);
+    int[] order = search.sweepFrom(problem.source);
+    int[] last = new int[problem.nodes()];
+    for (int at = 0; at < order.length; at++) {
+      last[order[at]] = at;
+    }
+    int[] change = new int[order.length + 1];
+    for (int at = 0; at < order.length; at++) {
+      int end = at;
+      for (int link : search.linksAt[order[at]]) {
+        end = Math.max(end, last[problem.otherEnd(link, order[at])]);
+      }
+      change[at]++;
+      change[end]--;
+    }
+    int width = 0;
+    int now = 0;
+    for (int step : change) {
+      now += step;
+      width = Math.max(width, now);
+    }
+    return width;
+  }
+
   /** The nodes connected with the source, in sweeping order. */
   static int[] best(NetworkProblem problem, WorkMeter meter) {
     FrontierOrder search = new FrontierOrder(problem, meter);

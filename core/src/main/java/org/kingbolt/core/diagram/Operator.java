@@ -63,6 +63,17 @@ public abstract class Operator {
     return new Swept(rule);
   }
 
+  /**
+   * An operator that decides slot by slot, with the likeliest states of each layer only.
+   *
+   * @param works indexed by slot, to tell which states are likely
+   * @param most how many states of a layer are followed
+   * @param otherwise where the others settle
+   */
+  static Operator likely(StateRule rule, double[] works, double[] fails, int most, int otherwise) {
+    return new Likely(rule, works, fails, most, otherwise);
+  }
+
   /** The operator that works exactly where another one fails with every slot inverted. */
   static Operator dual(Operator operator) {
     return new Dual(operator);
@@ -121,6 +132,50 @@ public abstract class Operator {
     @Override
     void expect(double[] works, double[] fails, double[] result, WorkMeter meter) {
       StateSweep.expect(rule, works, fails, result, meter);
+    }
+  }
+
+  private static final class Likely extends Operator {
+    private final StateRule rule;
+    private final double[] works;
+    private final double[] fails;
+    private final int most;
+    private final int otherwise;
+
+    Likely(StateRule rule, double[] works, double[] fails, int most, int otherwise) {
+      this.rule = rule;
+      this.works = works;
+      this.fails = fails;
+      this.most = most;
+      this.otherwise = otherwise;
+    }
+
+    @Override
+    int levels() {
+      return rule.steps();
+    }
+
+    @Override
+    int slotAt(int level) {
+      return rule.slot(level);
+    }
+
+    @Override
+    boolean isReduced() {
+      return false;
+    }
+
+    @Override
+    Diagram make(WorkMeter meter) {
+      return TruncatedSweep.template(rule, works, fails, most, otherwise, meter);
+    }
+
+    /** Follows the states that are likely at these probabilities, not those of the template. */
+    @Override
+    void expect(double[] up, double[] down, double[] result, WorkMeter meter) {
+      double[] both = TruncatedSweep.expect(rule, up, down, most, otherwise, meter);
+      result[0] = both[0];
+      result[1] = both[1];
     }
   }
 

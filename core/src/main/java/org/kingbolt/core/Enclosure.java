@@ -1,0 +1,188 @@
+package org.kingbolt.core;
+
+import java.util.List;
+import org.kingbolt.core.diagram.NetworkRelaxer;
+import org.kingbolt.core.diagram.WorkMeter;
+
+/**
+ * Two probabilities between which the reliability of a structure lies, however large it is, brought
+ * nearer to each other step by step.
+ *
+ * <p>Everything that can be worked out exactly is. A network that is too wide to sweep is replaced,
+ * once by networks that work less often and once by networks that work more often: with some of its
+ * links held failed, or working; or with the improbable states of the sweep counted as failed, or
+ * as working. Since the structure is coherent, what comes out holds the exact figure.
+ *
+ * <p>Assumes that components fail independently. Deterministic: the same steps give the same
+ * figures. Ends are as computed, up to rounding by a few units in the last place for every
+ * component; {@code org.kingbolt.bounds} rounds them outwards.
+ *
+ * <p>For one thread.
+ *
+ * <p>Example: {@code Enclosure e = Enclosure.of(structure, p, Budget.ofHeap()); while (e.narrow())
+ * {}}
+ */
+public final class Enclosure {
+
+  private static final long FIRST_EFFORT = 1 << 17;
+  private static final int MORE_EFFORT = 4;
+
+  private final Numbering numbering;
+  private final double[] working;
+  private final double[] failing;
+  private final NetworkRelaxer relaxer;
+  private final WorkMeter meter;
+  private final long mostEffort;
+  private long effort;
+  private boolean started;
+  private boolean exact;
+  private boolean ended;
+  private int changes;
+  private double[] lower = {0, 1};
+  private double[] upper = {1, 0};
+
+  private Enclosure(
+      Numbering numbering, double[] working, double[] failing, Budget budget, long effort) {
+    this.numbering = numbering;
+    this.working = working;
+    this.failing = failing;
+    this.relaxer = new NetworkRelaxer(working, failing);
+    this.meter = budget.start("narrowing an interval");
+    this.mostEffort = Math.max(1, budget.nodes() / 2);
+    this.effort = Math.min(effort, mostEffort);
+  }
+
+  /**
+   * Starts with the interval from 0 to 1.
+   *
+   * @param structure the structure
+   * @param p the components' probabilities
+   * @param budget how much work all steps together may cost; the clock starts now
+   * @return an enclosure to be narrowed
+   * @throws IllegalArgumentException if components have no probability; the message lists them
+   * @throws BudgetExceededException if the structure is too large to be read
+   */
+  public static Enclosure of(Structure structure, Probabilities p, Budget budget) {
+    return of(structure, p, budget, FIRST_EFFORT);
+  }
+
+  /** With little effort even small structures are not worked out exactly. */
+  static Enclosure of(Structure structure, Probabilities p, Budget budget, long firstEffort) {
+    Check.notNull(structure, "structure");
+    Check.notNull(p, "probabilities");
+    WorkMeter reading = Check.notNull(budget, "budget").start("reading the structure");
+    Numbering numbering = new Numbering(structure, reading);
+    List<String> components = numbering.components();
+    double[] working = new double[components.size()];
+    double[] failing = new double[components.size()];
+    p.fill(components, working, failing);
+    return new Enclosure(numbering, working, failing, budget, firstEffort);
+  }
+
+  /**
+   * Takes one step. The interval never widens.
+   *
+   * @return whether another step may narrow it further within the budget's nodes
+   * @throws BudgetExceededException if the time is over or the thread is interrupted; the interval
+   *     reached stays
+   */
+  public boolean narrow() {
+    if (ended) {
+      return false;
+    }
+    try {
+      ended = !step();
+    } catch (BudgetExceededException over) {
+      if (over.limit() != BudgetExceededException.Limit.NODES) {
+        throw over;
+      }
+      ended = true;
+    }
+    return !ended;
+  }
+
+  private boolean step() {
+    meter.now(0);
+    if (!started) {
+      update();
+      started = true;
+      return !exact;
+    }
+    while (!relaxer.step(effort, meter)) {
+      if (relaxer.isExact() || effort >= mostEffort) {
+        update();
+        return false;
+      }
+      effort = Math.min(mostEffort, effort * MORE_EFFORT);
+    }
+    update();
+    return !exact;
+  }
+
+  private void update() {
+    if (started && relaxer.changes() == changes) {
+      return;
+    }
+    double[] less = side(true);
+    double[] more = side(false);
+    if (isSmaller(lower, less)) {
+      lower = less;
+    }
+    if (isSmaller(more, upper)) {
+      upper = more;
+    }
+    changes = relaxer.changes();
+    exact = relaxer.isExact();
+  }
+
+  private double[] side(boolean lessWorking) {
+    return Compilation.oneSided(
+        numbering, relaxer.begin(lessWorking), working, failing, effort, meter);
+  }
+
+  /** Whether one probability is smaller than another, judged on the side that has more digits. */
+  private static boolean isSmaller(double[] a, double[] b) {
+    return b[1] < b[0] ? a[1] > b[1] : a[0] < b[0];
+  }
+
+  /**
+   * Tells whether both ends are the exact figure.
+   *
+   * @return true when nothing is left to narrow
+   */
+  public boolean isExact() {
+    return exact;
+  }
+
+  /**
+   * Returns the lower end.
+   *
+   * @return the system is at least as likely to work as this, up to rounding
+   */
+  public Probability lower() {
+    return Probability.computed(lower[0], lower[1]);
+  }
+
+  /**
+   * Returns the upper end.
+   *
+   * @return the system is at most as likely to work as this, up to rounding
+   */
+  public Probability upper() {
+    return Probability.computed(upper[0], upper[1]);
+  }
+
+  /**
+   * Says how far it has got.
+   *
+   * @return one line
+   */
+  @Override
+  public String toString() {
+    return "Enclosure[failing from "
+        + upper().failing()
+        + " to "
+        + lower().failing()
+        + "]; call narrow()";
+  }
+}

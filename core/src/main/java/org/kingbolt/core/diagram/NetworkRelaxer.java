@@ -1,0 +1,103 @@
+package org.kingbolt.core.diagram;
+
+import java.util.ArrayList;
+import java.util.List;
+
+/**
+ * Replaces the networks of a structure that are too wide to sweep by others that can be worked out,
+ * all of which work less often, or all of which work more often, and which come nearer step by
+ * step.
+ *
+ * <p>The structure is expressed anew for each side and after each step; its networks must come in
+ * the same order every time. For one thread.
+ */
+public final class NetworkRelaxer {
+
+  private final double[] working;
+  private final double[] failing;
+  private final List<NetworkEnclosure> networks = new ArrayList<>();
+  private boolean lessWorking;
+  private int next;
+  private boolean busy;
+
+  /**
+   * Starts with nothing known of any network.
+   *
+   * @param working indexed by variable
+   * @param failing indexed by variable: the complement
+   */
+  public NetworkRelaxer(double[] working, double[] failing) {
+    this.working = working;
+    this.failing = failing;
+  }
+
+  /**
+   * Makes ready for a structure to be expressed.
+   *
+   * @param newLessWorking whether what is expressed is to work at most as often as the structure,
+   *     or at least as often
+   * @return this
+   */
+  public NetworkRelaxer begin(boolean newLessWorking) {
+    lessWorking = newLessWorking;
+    next = 0;
+    return this;
+  }
+
+  /**
+   * Takes one step with the network of which least is known; networks come to be known as the
+   * structure is first expressed.
+   *
+   * @param most how many nodes may be held
+   * @param meter hears of the work
+   * @return whether another step of this size may help
+   */
+  public boolean step(long most, WorkMeter meter) {
+    List<NetworkEnclosure> open = new ArrayList<>(networks);
+    open.removeIf(NetworkEnclosure::isExact);
+    open.sort((a, b) -> Double.compare(b.gap(), a.gap()));
+    for (NetworkEnclosure network : open) {
+      if (network.step(most, meter)) {
+        return true;
+      }
+    }
+    return false;
+  }
+
+  /**
+   * Counts how often what replaces a network has changed.
+   *
+   * @return a number that stays the same as long as an expression would be the same
+   */
+  public int changes() {
+    return networks.stream().mapToInt(NetworkEnclosure::changes).sum();
+  }
+
+  /**
+   * Tells whether every network met so far is used as it is.
+   *
+   * @return true when nothing is relaxed
+   */
+  public boolean isExact() {
+    return networks.stream().allMatch(NetworkEnclosure::isExact);
+  }
+
+  boolean isBusy() {
+    return busy;
+  }
+
+  int sweep(Composer composer, NetworkProblem network, boolean dual, int[] parts, WorkMeter meter) {
+    if (next == networks.size()) {
+      Estimates estimates = new Estimates(composer, working, failing, meter);
+      double[] works = estimates.works(parts);
+      double[] fails = estimates.fails(parts);
+      networks.add(
+          new NetworkEnclosure(network, dual ? fails : works, dual ? works : fails, meter));
+    }
+    busy = true;
+    int expression =
+        networks.get(next++).express(composer, lessWorking != dual, dual, parts, meter);
+    busy = false;
+    return expression;
+  }
+}

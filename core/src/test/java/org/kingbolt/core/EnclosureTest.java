@@ -1,0 +1,135 @@
+package org.kingbolt.core;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertFalse;
+import static org.junit.jupiter.api.Assertions.assertThrows;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.math.BigDecimal;
+import java.time.Duration;
+import net.jqwik.api.Arbitrary;
+import net.jqwik.api.ForAll;
+import net.jqwik.api.Property;
+import net.jqwik.api.Provide;
+import net.jqwik.api.constraints.IntRange;
+import org.junit.jupiter.api.Test;
+import org.kingbolt.core.testing.RandomStructures;
+import org.kingbolt.core.testing.RandomStructures.Sample;
+
+/** With hardly any effort allowed, even small structures are enclosed and not worked out. */
+class EnclosureTest {
+
+  private static final BigDecimal SLACK = new BigDecimal("1e-12");
+
+  @Provide
+  Arbitrary<Sample> structures() {
+    return RandomStructures.any();
+  }
+
+  @Provide
+  Arbitrary<Sample> networks() {
+    return RandomStructures.networks();
+  }
+
+  @Provide
+  Arbitrary<Probabilities> probabilities() {
+    return RandomStructures.probabilities();
+  }
+
+  @Property(tries = 2000)
+  void networks_stayInside(
+      @ForAll("networks") Sample sample,
+      @ForAll("probabilities") Probabilities p,
+      @ForAll @IntRange(min = 1, max = 60) int effort) {
+    assertEncloses(sample, p, effort);
+  }
+
+  @Property(tries = 500)
+  void structures_stayInside(
+      @ForAll("structures") Sample sample,
+      @ForAll("probabilities") Probabilities p,
+      @ForAll @IntRange(min = 1, max = 60) int effort) {
+    assertEncloses(sample, p, effort);
+  }
+
+  private static void assertEncloses(Sample sample, Probabilities p, int effort) {
+    BigDecimal works = sample.oracle().works(p);
+    BigDecimal fails = sample.oracle().fails(p);
+    Enclosure enclosure = Enclosure.of(sample.structure(), p, Budget.ofNodes(1_000_000), effort);
+    boolean again = true;
+    double width = Double.POSITIVE_INFINITY;
+    while (again) {
+      again = enclosure.narrow();
+      Probability lower = enclosure.lower();
+      Probability upper = enclosure.upper();
+      assertNotAbove(lower.working(), works, enclosure);
+      assertNotAbove(upper.failing(), fails, enclosure);
+      assertNotBelow(upper.working(), works, enclosure);
+      assertNotBelow(lower.failing(), fails, enclosure);
+      assertTrue(lower.failing() - upper.failing() <= width + 1e-15, "widened: " + enclosure);
+      width = lower.failing() - upper.failing();
+    }
+    assertTrue(enclosure.isExact());
+    assertEquals(0, width, 1e-15);
+    assertFalse(enclosure.narrow());
+  }
+
+  private static void assertNotAbove(double end, BigDecimal exact, Enclosure enclosure) {
+    BigDecimal most = exact.add(exact.multiply(SLACK));
+    assertTrue(new BigDecimal(end).compareTo(most) <= 0, exact + " outside " + enclosure);
+  }
+
+  private static void assertNotBelow(double end, BigDecimal exact, Enclosure enclosure) {
+    BigDecimal least = exact.subtract(exact.multiply(SLACK));
+    assertTrue(new BigDecimal(end).compareTo(least) >= 0, exact + " outside " + enclosure);
+  }
+
+  @Test
+  void smallBudget_endsQuietlyWithAnInterval() {
+    Structure grid = grid(12);
+    Enclosure enclosure =
+        Enclosure.of(grid, Probabilities.all(Probability.failing(0.01)), Budget.ofNodes(100_000));
+    while (enclosure.narrow()) {
+      assertFalse(enclosure.isExact());
+    }
+    double least = enclosure.upper().failing();
+    assertTrue(least > 2.0e-4 && enclosure.lower().failing() < least * 1.01, enclosure::toString);
+  }
+
+  @Test
+  void timeAndInterrupt_endTheStep() {
+    Probabilities p = Probabilities.all(0.9);
+    Budget none = Budget.ofHeap().withTime(Duration.ofNanos(1));
+    assertEquals(
+        BudgetExceededException.Limit.TIME,
+        assertThrows(BudgetExceededException.class, () -> Enclosure.of(grid(9), p, none).narrow())
+            .limit());
+    Enclosure interrupted = Enclosure.of(grid(9), p, Budget.ofHeap());
+    Thread.currentThread().interrupt();
+    try {
+      assertEquals(
+          BudgetExceededException.Limit.INTERRUPT,
+          assertThrows(BudgetExceededException.class, interrupted::narrow).limit());
+    } finally {
+      Thread.interrupted();
+    }
+    assertEquals(1, interrupted.upper().working());
+    assertTrue(interrupted.narrow());
+  }
+
+  private static Structure grid(int side) {
+    NetworkBuilder grid = Structure.network();
+    for (int row = 0; row < side; row++) {
+      for (int column = 0; column < side; column++) {
+        String here = row + "," + column;
+        if (column + 1 < side) {
+          grid = grid.link("h" + here, here, row + "," + (column + 1));
+        }
+        if (row + 1 < side) {
+          grid = grid.link("v" + here, here, (row + 1) + "," + column);
+        }
+      }
+    }
+    return grid.connecting("0,0", (side - 1) + "," + (side - 1));
+  }
+}
