@@ -1,6 +1,7 @@
 package org.kingbolt.bounds;
 
 import java.util.Objects;
+import org.jspecify.annotations.Nullable;
 import org.kingbolt.core.CoherentSystem;
 import org.kingbolt.core.Probabilities;
 import org.kingbolt.core.Structure;
@@ -12,24 +13,26 @@ import org.kingbolt.core.Structure;
  */
 public final class Bounds {
 
-  private final CoherentSystem system;
+  private final Structure structure;
+  private final @Nullable CoherentSystem system;
 
-  private Bounds(CoherentSystem system) {
+  private Bounds(Structure structure, @Nullable CoherentSystem system) {
+    this.structure = structure;
     this.system = system;
   }
 
   /**
-   * Bounds for a structure, which is compiled within the default budget.
+   * Bounds for a structure, which may be too large to compile: only the bounds that need all
+   * minimal sets compile it, when they are asked for.
    *
    * @param structure the system's structure
    * @return a start for questions
-   * @throws org.kingbolt.core.BudgetExceededException if the structure is too large to compile
    */
   public static Bounds of(Structure structure) {
-    return of(
+    return new Bounds(
         Objects.requireNonNull(
-                structure, "structure is null; give a structure, or a system compiled from one")
-            .compile());
+            structure, "structure is null; give a structure, or a system compiled from one"),
+        null);
   }
 
   /**
@@ -39,9 +42,9 @@ public final class Bounds {
    * @return a start for questions
    */
   public static Bounds of(CoherentSystem system) {
-    return new Bounds(
-        Objects.requireNonNull(
-            system, "system is null; give a compiled system, or a structure to compile"));
+    Objects.requireNonNull(
+        system, "system is null; give a compiled system, or a structure to compile");
+    return new Bounds(system.structure(), system);
   }
 
   /**
@@ -53,6 +56,7 @@ public final class Bounds {
    */
   public BoundsAtProbabilities given(Probabilities p) {
     return new BoundsAtProbabilities(
+        structure,
         system,
         Objects.requireNonNull(
             p,
@@ -66,6 +70,6 @@ public final class Bounds {
    */
   @Override
   public String toString() {
-    return "Bounds[" + system + "]; call given(probabilities)";
+    return "Bounds[" + structure.components().size() + " components]; call given(probabilities)";
   }
 }

@@ -5,11 +5,14 @@ import java.util.List;
 import java.util.Map;
 import java.util.Objects;
 import java.util.Set;
+import java.util.function.Predicate;
+import org.jspecify.annotations.Nullable;
 import org.kingbolt.core.Budget;
 import org.kingbolt.core.CoherentSystem;
 import org.kingbolt.core.MinimalSets;
 import org.kingbolt.core.Probabilities;
 import org.kingbolt.core.Probability;
+import org.kingbolt.core.Structure;
 import org.kingbolt.core.diagram.WorkMeter;
 
 /**
@@ -23,17 +26,91 @@ import org.kingbolt.core.diagram.WorkMeter;
  */
 public final class BoundsAtProbabilities {
 
-  private final CoherentSystem system;
+  private final Structure structure;
+  private final List<String> components;
   private final Probabilities p;
+
+  /** Compiled when first needed; two threads may both do it. */
+  private volatile @Nullable CoherentSystem system;
+
   private final Map<String, Probability> byName = new HashMap<>();
 
-  BoundsAtProbabilities(CoherentSystem system, Probabilities p) {
+  BoundsAtProbabilities(Structure structure, @Nullable CoherentSystem system, Probabilities p) {
+    this.structure = structure;
     this.system = system;
+    this.components = structure.components();
     this.p = p;
-    List<Probability> values = p.forComponents(system.components());
+    List<Probability> values = p.forComponents(components);
     for (int i = 0; i < values.size(); i++) {
-      byName.put(system.components().get(i), values.get(i));
+      byName.put(components.get(i), values.get(i));
     }
+  }
+
+  private CoherentSystem compiled(Budget budget) {
+    CoherentSystem known = system;
+    if (known == null) {
+      known = structure.compile(budget);
+      system = known;
+    }
+    return known;
+  }
+
+  /**
+   * An interval on the exact figure, however large the structure is, as narrow as the budget
+   * allows; see {@link #within(Budget, double, Predicate)}.
+   *
+   * @param budget how much work it may cost
+   * @return the interval; both ends are the figure itself, up to rounding, where it can be worked
+   *     out
+   * @throws org.kingbolt.core.BudgetExceededException if the thread is interrupted
+   */
+  public Interval within(Budget budget) {
+    return within(budget, 0, interval -> true);
+  }
+
+  /**
+   * An interval on the exact figure, no narrower than asked for; see {@link #within(Budget, double,
+   * Predicate)}.
+   *
+   * @param budget how much work it may cost
+   * @param relativeWidth the {@link Interval#relativeWidthFailing()} that is enough, at least 0
+   * @return the interval; wider than asked for when the budget is used up
+   * @throws IllegalArgumentException if the width is negative or not a number
+   * @throws org.kingbolt.core.BudgetExceededException if the thread is interrupted
+   */
+  public Interval within(Budget budget, double relativeWidth) {
+    return within(budget, relativeWidth, interval -> true);
+  }
+
+  /**
+   * An interval on the exact figure, narrowed step by step until it is as narrow as asked for, the
+   * caller has seen enough, or the budget is used up.
+   *
+   * <p>Holds for independent components. What can be worked out exactly is. A network too wide for
+   * that is replaced by networks that work less often and by others that work more often: excerpts
+   * with some links held failed, or working, which grow where their partial derivatives differ
+   * most; or the likeliest states of a sweep, with the others counted as failed, or as working.
+   * Gates with too much sharing are bounded from their factors, which are associated. With a budget
+   * of nodes alone the outcome does not depend on the machine's speed.
+   *
+   * <p>Example: {@code Bounds.of(grid).given(p).within(Budget.ofTime(Duration.ofSeconds(10)), 0.01,
+   * interval -> true)}.
+   *
+   * @param budget how much work it may cost
+   * @param relativeWidth the {@link Interval#relativeWidthFailing()} that is enough, at least 0
+   * @param goOn is shown every interval, each inside the one before; false ends the work
+   * @return the last interval
+   * @throws IllegalArgumentException if the width is negative or not a number
+   * @throws org.kingbolt.core.BudgetExceededException if the thread is interrupted
+   */
+  public Interval within(Budget budget, double relativeWidth, Predicate<Interval> goOn) {
+    requireBudget(budget);
+    Objects.requireNonNull(goOn, "the watcher is null; give one, such as interval -> true");
+    if (!(relativeWidth >= 0)) {
+      throw new IllegalArgumentException(
+          "relative width " + relativeWidth + "; give 0 or more, such as 0.01 for one percent");
+    }
+    return CertifiedInterval.of(structure, p, budget, relativeWidth, goOn, slack());
   }
 
   /**
@@ -64,8 +141,8 @@ public final class BoundsAtProbabilities {
    */
   public Interval esaryProschan(Budget budget) {
     requireBudget(budget);
-    SetProduct cuts = combined(system.minimalCutSets(budget), false, budget);
-    SetProduct paths = combined(system.minimalPathSets(budget), true, budget);
+    SetProduct cuts = combined(compiled(budget).minimalCutSets(budget), false, budget);
+    SetProduct paths = combined(compiled(budget).minimalPathSets(budget), true, budget);
     return new Interval(
         Rounding.down(cuts.none(), cuts.any(), cuts.operations() + slack()),
         Rounding.up(paths.any(), paths.none(), paths.operations() + slack()),
@@ -102,8 +179,8 @@ public final class BoundsAtProbabilities {
    */
   public Interval minMax(Budget budget) {
     requireBudget(budget);
-    SetProduct path = best(system.minimalPathSets(budget), true, budget);
-    SetProduct cut = best(system.minimalCutSets(budget), false, budget);
+    SetProduct path = best(compiled(budget).minimalPathSets(budget), true, budget);
+    SetProduct cut = best(compiled(budget).minimalCutSets(budget), false, budget);
     return new Interval(
         Rounding.down(path.any(), path.none(), path.operations() + slack()),
         Rounding.up(cut.none(), cut.any(), cut.operations() + slack()),
@@ -119,7 +196,7 @@ public final class BoundsAtProbabilities {
 
   /** Operations in an exact evaluation, for whose rounding an interval must leave room, too. */
   private long slack() {
-    return 4L * system.components().size();
+    return 4L * components.size();
   }
 
   private SetProduct combined(MinimalSets sets, boolean paths, Budget budget) {
@@ -158,6 +235,8 @@ public final class BoundsAtProbabilities {
    */
   @Override
   public String toString() {
-    return "Bounds[" + system + "] at given probabilities; call esaryProschan() or minMax()";
+    return "Bounds["
+        + components.size()
+        + " components] at given probabilities; call within(budget), esaryProschan() or minMax()";
   }
 }

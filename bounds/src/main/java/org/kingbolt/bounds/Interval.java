@@ -93,6 +93,56 @@ public final class Interval {
   }
 
   /**
+   * Combines two intervals for the same figure: it lies in both.
+   *
+   * @param other another interval for the same system at the same probabilities
+   * @return the part that both have in common, under the stricter of both assumptions
+   * @throws IllegalStateException if they have nothing in common, which is a defect: of the
+   *     program, or because the intervals are not about the same figure
+   */
+  public Interval intersection(Interval other) {
+    Objects.requireNonNull(other, "interval is null; give one for the same system");
+    boolean lowerIsTheirs = isAbove(other.lower, lower);
+    boolean upperIsTheirs = isAbove(upper, other.upper);
+    if (!lowerIsTheirs && !upperIsTheirs) {
+      return this;
+    }
+    if (lowerIsTheirs && upperIsTheirs) {
+      return other;
+    }
+    Probability newLower = lowerIsTheirs ? other.lower : lower;
+    Probability newUpper = upperIsTheirs ? other.upper : upper;
+    if (isAbove(newLower, newUpper)) {
+      throw new IllegalStateException(
+          method
+              + " ("
+              + this
+              + ") and "
+              + other.method
+              + " ("
+              + other
+              + ") have nothing in common; ask both about one system at the same probabilities, and"
+              + " report a defect if you did");
+    }
+    return new Interval(
+        newLower,
+        newUpper,
+        assumption.and(other.assumption),
+        (lowerIsTheirs ? other : this).method
+            + " from below, "
+            + (upperIsTheirs ? other : this).method
+            + " from above",
+        "the figure lies in both intervals: " + reason + "; " + other.reason);
+  }
+
+  /** Judged on the side that has more digits. */
+  private static boolean isAbove(Probability one, Probability other) {
+    return other.failing() <= other.working()
+        ? one.failing() < other.failing()
+        : one.working() > other.working();
+  }
+
+  /**
    * Returns the distance of the ends.
    *
    * @return from 0 to 1, taken on the side where the ends are smaller
