@@ -127,8 +127,11 @@ public final class Signature {
    * {@code a} it is this divided by {@code a}.
    *
    * @return exactly; 49/60 for the bridge of five components
+   * @throws IllegalStateException if the system never fails: it is the side of a {@link Pivot} that
+   *     works without further components
    */
   public BigFraction meanLifetime() {
+    checkFails();
     int n = order();
     // each term 1/(n C(n-1, i)) divides the least common multiple of 1 to n
     BigInteger common = BigInteger.ONE;
@@ -160,6 +163,7 @@ public final class Signature {
    */
   public double meanLifetime(double... meanFailureTimes) {
     Check.notNull(meanFailureTimes, "array of mean failure times");
+    checkFails();
     if (meanFailureTimes.length != order()) {
       throw new IllegalArgumentException(
           meanFailureTimes.length
@@ -185,6 +189,12 @@ public final class Signature {
       before = time;
     }
     return sum;
+  }
+
+  private void checkFails() {
+    if (workingStates.get(0).signum() > 0) {
+      throw new IllegalStateException("the system never fails, and so has no mean life");
+    }
   }
 
   /**

@@ -62,6 +62,7 @@ class BridgeTest {
   @Test
   void meanLife_isThePublishedOne() {
     assertEquals(new BigFraction(49, 60), Exact.meanLife(bridge.signature()));
+    assertEquals(new BigFraction(49, 60), bridge.signature().meanLifetime());
   }
 
   /** The bridge is its own dual: Moore and Shannon 1956 (from memory). */

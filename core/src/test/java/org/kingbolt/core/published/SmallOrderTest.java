@@ -61,6 +61,7 @@ class SmallOrderTest {
     CoherentSystem system = Structure.ofPathSets(sets(paths)).compile();
     assertEquals(signature, system.signature().toString());
     assertEquals(meanLife, Exact.meanLife(system.signature()).toString().replace(" ", ""));
+    assertEquals(meanLife, system.signature().meanLifetime().toString().replace(" ", ""));
   }
 
   /**
