@@ -118,7 +118,10 @@ class CurveShapeTest {
     assertEquals(Probability.IMPOSSIBLE, never.steepest());
   }
 
-  /** The density of the k-th largest of n is largest at (n-k)/(n-1). */
+  /**
+   * David and Nagaraja, Order Statistics, ch. 2 (from memory): the density of the k-th smallest of
+   * n uniform numbers, which is the slope, is largest at (k-1)/(n-1).
+   */
   @ParameterizedTest
   @CsvSource({"2, 3", "2, 4", "3, 4", "2, 5", "30, 100", "99, 100", "2, 1000"})
   void kOutOfN_isSteepestAtTheModeOfItsBetaDensity(int k, int n) {
