@@ -32,7 +32,7 @@ final class PolynomialRows {
     rows.add(row("6x50 grid: polynomial", false, () -> grid(6, 50)));
     rows.add(row("IEEE 118-bus, first to last bus: polynomial", true, () -> buses("ieee118")));
     rows.add(row("IEEE 300-bus, first to last bus: polynomial", false, () -> buses("ieee300")));
-    rows.add(row(MANY + " in parallel: polynomial", true, () -> Structure.parallel(names())));
+    rows.add(row(MANY + " in parallel: polynomial", false, () -> Structure.parallel(names())));
     rows.add(
         new Workload(
             MANY + " in parallel: polynomial by powers",
