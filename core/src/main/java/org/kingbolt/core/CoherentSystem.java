@@ -202,28 +202,53 @@ public final class CoherentSystem implements Serializable {
   }
 
   /**
-   * The reliability as a polynomial in one p common to all components.
+   * The reliability as a polynomial in one p common to all components, within {@link
+   * Budget#ofHeap()}.
    *
    * @return exact integers
    * @throws BudgetExceededException if the counts grow too large
    */
   public ReliabilityPolynomial polynomial() {
-    return new ReliabilityPolynomial(workingStates());
+    return polynomial(Budget.ofHeap());
+  }
+
+  /**
+   * The reliability as a polynomial in one p common to all components.
+   *
+   * @param budget how much work it may cost
+   * @return exact integers. Cost: one scan, of as many bits a node as the square of the number of
+   *     components; memory, the counts of the levels in use.
+   * @throws BudgetExceededException if the budget is used up
+   */
+  public ReliabilityPolynomial polynomial(Budget budget) {
+    return new ReliabilityPolynomial(workingStates(budget));
+  }
+
+  /**
+   * The signature: which failure, the first, second, ... , makes the system fail, when components
+   * are exchangeable. Within {@link Budget#ofHeap()}.
+   *
+   * @return exact fractions
+   * @throws BudgetExceededException if the counts grow too large
+   */
+  public Signature signature() {
+    return signature(Budget.ofHeap());
   }
 
   /**
    * The signature: which failure, the first, second, ... , makes the system fail, when components
    * are exchangeable.
    *
-   * @return exact fractions
-   * @throws BudgetExceededException if the counts grow too large
+   * @param budget how much work it may cost
+   * @return exact fractions. Cost: that of {@link #polynomial(Budget)}.
+   * @throws BudgetExceededException if the budget is used up
    */
-  public Signature signature() {
-    return Signature.of(workingStates());
+  public Signature signature(Budget budget) {
+    return new Signature(workingStates(budget));
   }
 
-  private List<BigInteger> workingStates() {
-    WorkMeter meter = Budget.ofHeap().start("counting working states");
+  private List<BigInteger> workingStates(Budget budget) {
+    WorkMeter meter = Check.notNull(budget, "budget").start("counting working states");
     return List.of(StateCounts.workingBySize(diagram, meter));
   }
 

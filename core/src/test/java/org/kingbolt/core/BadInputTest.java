@@ -39,7 +39,8 @@ class BadInputTest {
             new NumberTaker(qA, x -> Probabilities.failing(Map.of("a", x))),
             new NumberTaker(pA, x -> Probabilities.all(0.5).with("a", x)),
             new NumberTaker("probability of working", x -> system.reliability(x)),
-            new NumberTaker("probability of working", x -> polynomial.at(x)));
+            new NumberTaker("probability of working", x -> polynomial.at(x)),
+            new NumberTaker("probability of working", x -> polynomial.derivative(x)));
     return Stream.of(
             Double.NaN,
             -0.1,

@@ -10,6 +10,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Set;
 import java.util.stream.Stream;
+import org.apache.commons.math3.fraction.BigFraction;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.MethodSource;
 
@@ -26,6 +27,7 @@ class NullArgumentTest {
   private static final Budget NO_BUDGET = null;
   private static final Probabilities NO_PROBABILITIES = null;
   private static final Probability NO_PROBABILITY = null;
+  private static final BigFraction NO_FRACTION = null;
 
   static Stream<BadCall> descriptions() {
     List<List<String>> nullSecond = Arrays.asList(List.of("a"), null);
@@ -100,6 +102,10 @@ class NullArgumentTest {
         isNull("pivot", () -> SYSTEM.pivot("a").reliability(null), "probabilities"),
         isNull("equation", () -> SYSTEM.pivot("a").equation(null), "probabilities"),
         isNull("polynomial", () -> SYSTEM.polynomial().at(NO_PROBABILITY), "probability"),
+        isNull("polynomial", () -> SYSTEM.polynomial().at(NO_FRACTION), "probability"),
+        isNull("slope", () -> SYSTEM.polynomial().derivative(NO_PROBABILITY), "probability"),
+        isNull("polynomial budget", () -> SYSTEM.polynomial(null), "budget"),
+        isNull("signature budget", () -> SYSTEM.signature(null), "budget"),
         isNull("most probable", () -> cuts.mostProbable(1, null), "probabilities"),
         isNull("set", () -> cuts.probability(null, Probabilities.all(0.5)), "set"),
         isNull("set", () -> cuts.probability(Set.of("a"), null), "probabilities"),

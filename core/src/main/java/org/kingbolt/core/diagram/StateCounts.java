@@ -1,107 +1,161 @@
 package org.kingbolt.core.diagram;
 
 import java.math.BigInteger;
+import java.util.Arrays;
 
 /**
  * Exact counts over the states of a function: how many working states have exactly j variables
  * working.
  *
- * <p>Method: every node carries the generating function of its working states, as one big integer
- * whose blocks of bits are the coefficients, so that adding and shifting do the arithmetic. Cost:
- * one scan; an operation on {@code levels^2} bits a node.
+ * <p>Method: level by level from below, every node carries the generating function of its working
+ * states by number of working variables, in plain words. What no node further up asks for is let
+ * go, so that only the layers in use are held. Cost: one scan; an operation on {@code levels^2}
+ * bits for every node and every level that an edge skips, where edges to one node share the work.
  */
 public final class StateCounts {
 
-  /** From so many free variables on, a power is multiplied. */
-  private static final int FEW = 8;
+  private static final long[] NONE = {};
 
-  private final int block;
+  private final Diagram diagram;
+  private final WorkMeter meter;
 
-  /** 1 + x. */
-  private final BigInteger factor;
+  /** The length of one count. */
+  private final int words;
 
-  private int lastExponent;
-  private BigInteger lastPower = BigInteger.ONE;
+  /** By id: the counts in a row, fewest working variables first; none when let go or all zero. */
+  private final long[][] counts;
 
-  private StateCounts(int block) {
-    this.block = block;
-    this.factor = BigInteger.ONE.add(BigInteger.ONE.shiftLeft(block));
+  /** By id: over how many of the last variables the counts are. */
+  private final int[] variables;
+
+  private long heldWords;
+
+  private StateCounts(Diagram diagram, WorkMeter meter) {
+    this.diagram = diagram;
+    this.meter = meter;
+    this.words = diagram.levels() / Long.SIZE + 1;
+    this.counts = new long[diagram.size()][];
+    this.variables = new int[diagram.size()];
+    Arrays.fill(counts, NONE);
   }
 
   /**
    * Counts working states by number of working variables.
    *
    * @param diagram any diagram
-   * @param meter hears of every node, in proportion to the size of its number
+   * @param meter hears of every node, in proportion to the counts that are held
    * @return entry j, from 0 to the number of levels, counts the working states with j variables
    *     working
    */
   public static BigInteger[] workingBySize(Diagram diagram, WorkMeter meter) {
-    return new StateCounts(diagram.levels() + 1).bySize(diagram, meter);
+    return new StateCounts(diagram, meter).bySize();
   }
 
-  private BigInteger[] bySize(Diagram diagram, WorkMeter meter) {
+  private BigInteger[] bySize() {
     int levels = diagram.levels();
-    long nodesPerNumber = 1 + (long) block * block / 8 / WorkMeter.BYTES_PER_NODE;
-    BigInteger[] count = new BigInteger[diagram.size()];
-    count[Diagram.FAILS] = BigInteger.ZERO;
-    count[Diagram.WORKS] = BigInteger.ONE;
-    int[] levelOf = levels(diagram);
+    int[] last = lastParents();
+    long[] one = new long[words];
+    one[0] = 1;
+    hold(Diagram.WORKS, one, 0);
     for (int level = levels - 1; level >= 0; level--) {
+      int below = levels - level - 1;
       for (int id = diagram.from(level); id < diagram.to(level); id++) {
-        meter.now(id * nodesPerNumber);
-        BigInteger low = free(count[diagram.low(id)], levelOf[diagram.low(id)] - level - 1);
-        BigInteger high = free(count[diagram.high(id)], levelOf[diagram.high(id)] - level - 1);
-        count[id] = low.add(high.shiftLeft(block));
+        if (last[id] == 0) {
+          continue;
+        }
+        int low = diagram.low(id);
+        int high = diagram.high(id);
+        lift(low, below);
+        lift(high, below);
+        long[] sum = Arrays.copyOf(counts[low], (below + 2) * words);
+        add(counts[high], sum, words);
+        hold(id, sum, below + 1);
+        letGo(low, last[low] == id);
+        letGo(high, last[high] == id);
       }
     }
-    BigInteger all = free(count[diagram.root()], levelOf[diagram.root()]);
+    lift(diagram.root(), levels);
+    long[] all = Arrays.copyOf(counts[diagram.root()], (levels + 1) * words);
     BigInteger[] bySize = new BigInteger[levels + 1];
-    BigInteger mask = BigInteger.ONE.shiftLeft(block).subtract(BigInteger.ONE);
-    for (int size = 0; size <= levels; size++) {
-      bySize[size] = all.shiftRight(size * block).and(mask);
-    }
+    Arrays.setAll(bySize, size -> integer(all, size * words, words));
     return bySize;
   }
 
-  /** Lets a number of variables vary freely: times (1 + x) for each. */
-  private BigInteger free(BigInteger counts, int variables) {
-    if (counts.signum() == 0 || variables == 0) {
-      return counts;
-    }
-    if (counts.equals(BigInteger.ONE)) {
-      return powers(variables);
-    }
-    if (variables > FEW) {
-      return counts.multiply(factor.pow(variables));
-    }
-    BigInteger result = counts;
-    for (int i = 0; i < variables; i++) {
-      result = result.add(result.shiftLeft(block));
-    }
-    return result;
-  }
-
-  /** (1 + x) to some power. Going up the levels asks for ever higher powers, one by one. */
-  private BigInteger powers(int exponent) {
-    if (exponent < lastExponent) {
-      return factor.pow(exponent);
-    }
-    for (; lastExponent < exponent; lastExponent++) {
-      lastPower = lastPower.add(lastPower.shiftLeft(block));
-    }
-    return lastPower;
-  }
-
-  private static int[] levels(Diagram diagram) {
-    int[] levelOf = new int[diagram.size()];
-    levelOf[Diagram.FAILS] = diagram.levels();
-    levelOf[Diagram.WORKS] = diagram.levels();
-    for (int level = 0; level < diagram.levels(); level++) {
-      for (int id = diagram.from(level); id < diagram.to(level); id++) {
-        levelOf[id] = level;
+  /** By id: the parent met last on the way up; 0 for what the root does not lead to. */
+  private int[] lastParents() {
+    int[] last = new int[diagram.size()];
+    last[diagram.root()] = diagram.size();
+    for (int id = diagram.root(); id >= 2; id--) {
+      if (last[id] > 0) {
+        last[diagram.low(id)] = Math.max(last[diagram.low(id)], id);
+        last[diagram.high(id)] = Math.max(last[diagram.high(id)], id);
       }
     }
-    return levelOf;
+    return last;
+  }
+
+  private void hold(int id, long[] count, int over) {
+    heldWords += count.length - counts[id].length;
+    counts[id] = count;
+    variables[id] = over;
+    long fixed = (long) counts.length * 16;
+    meter.now((fixed + heldWords * Long.BYTES) / WorkMeter.BYTES_PER_NODE);
+  }
+
+  private void letGo(int id, boolean unused) {
+    if (unused) {
+      heldWords -= counts[id].length;
+      counts[id] = NONE;
+    }
+  }
+
+  /** Lets further variables vary freely: times 1 + x for each. */
+  private void lift(int id, int over) {
+    if (counts[id].length == 0) {
+      return;
+    }
+    int first = variables[id];
+    if (first < over) {
+      hold(id, Arrays.copyOf(counts[id], (over + 1) * words), first);
+    }
+    for (int number = first + 1; number <= over; number++) {
+      timesFree(counts[id], number);
+      hold(id, counts[id], number);
+    }
+  }
+
+  private void timesFree(long[] count, int top) {
+    for (int to = top * words; to > 0; to -= words) {
+      long carry = 0;
+      for (int i = to; i < to + words; i++) {
+        long sum = count[i] + count[i - words] + carry;
+        carry = carry(count[i], count[i - words], sum);
+        count[i] = sum;
+      }
+    }
+  }
+
+  /** Adds from some word on. */
+  private static void add(long[] summand, long[] to, int offset) {
+    long carry = 0;
+    for (int i = 0; i < summand.length; i++) {
+      long a = to[offset + i];
+      long sum = a + summand[i] + carry;
+      carry = carry(a, summand[i], sum);
+      to[offset + i] = sum;
+    }
+  }
+
+  private static long carry(long a, long b, long sum) {
+    return ((a & b) | ((a | b) & ~sum)) >>> 63;
+  }
+
+  private static BigInteger integer(long[] from, int start, int words) {
+    byte[] bytes = new byte[words * Long.BYTES];
+    for (int i = 0; i < bytes.length; i++) {
+      long word = from[start + i / Long.BYTES];
+      bytes[bytes.length - 1 - i] = (byte) (word >>> (Byte.SIZE * (i % Long.BYTES)));
+    }
+    return new BigInteger(1, bytes);
   }
 }

@@ -62,6 +62,17 @@ class BridgeTest {
   @Test
   void meanLife_isThePublishedOne() {
     assertEquals(new BigFraction(49, 60), Exact.meanLife(bridge.signature()));
+    assertEquals(new BigFraction(49, 60), bridge.signature().meanLifetime());
+  }
+
+  /**
+   * Navarro, Ruiz and Sandoval, Commun. Statist. Theory Methods 36 (2007) 175 (from memory): the
+   * powers of the polynomial; the bridge is its own dual.
+   */
+  @Test
+  void minimalAndMaximalSignature_arePublishedPowers() {
+    assertEquals(integers(0, 2, 2, -5, 2), bridge.signature().minimalSignature());
+    assertEquals(integers(0, 2, 2, -5, 2), bridge.signature().maximalSignature());
   }
 
   /** The bridge is its own dual: Moore and Shannon 1956 (from memory). */

@@ -1,5 +1,6 @@
 package org.kingbolt.core.published;
 
+import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 import static org.kingbolt.core.Structure.atLeast;
 import static org.kingbolt.core.Structure.parallel;
@@ -15,6 +16,7 @@ import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.MethodSource;
 import org.kingbolt.core.CoherentSystem;
+import org.kingbolt.core.Probability;
 import org.kingbolt.core.Structure;
 
 /** The S-shape of h(p): one crossing of the diagonal, and a slope that is steep enough. */
@@ -25,14 +27,14 @@ class ShapeTest {
   /** Moore and Shannon, J. Franklin Inst. 262 (1956) 191 (from memory): golden section. */
   @Test
   void pairs_crossTheDiagonalAtTheGoldenSection() {
-    assertPrinted("0.6180339887499", fixedPoint(TWO_PAIRS.compile()));
-    assertPrinted("0.3819660112501", fixedPoint(TWO_PAIRS.dual().compile()));
+    assertCrosses("0.6180339887499", TWO_PAIRS);
+    assertCrosses("0.3819660112501", TWO_PAIRS.dual());
   }
 
   /** Moore and Shannon 1956 (from memory): a self-dual structure crosses at 1/2. */
   @Test
   void bridge_crossesTheDiagonalAtOneHalf() {
-    assertPrinted("0.5000000000000", fixedPoint(Families.bridge().connecting("s", "t").compile()));
+    assertCrosses("0.5000000000000", Families.bridge().connecting("s", "t"));
   }
 
   /** Moore and Shannon 1956 (formula from memory). */
@@ -45,7 +47,15 @@ class ShapeTest {
     "4, 5, 0.868876852096"
   })
   void kOutOfN_crossesTheDiagonalWherePublished(int k, int n, String printed) {
-    assertPrinted(printed, fixedPoint(atLeast(k, Families.components(n)).compile()));
+    assertCrosses(printed, atLeast(k, Families.components(n)));
+  }
+
+  private static void assertCrosses(String printed, Structure structure) {
+    CoherentSystem system = structure.compile();
+    assertPrinted(printed, fixedPoint(system));
+    Probability crossing = system.polynomial().crossing().orElseThrow();
+    assertPrinted(printed, crossing.working());
+    assertEquals(crossing, system.polynomial().betterThanComponentFrom().orElseThrow());
   }
 
   static Stream<Structure> structures() {

@@ -2,6 +2,7 @@ package org.kingbolt.core.published;
 
 import static java.util.stream.Collectors.joining;
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertTrue;
 import static org.kingbolt.core.published.Exact.sets;
 
 import java.util.ArrayList;
@@ -9,15 +10,27 @@ import java.util.List;
 import java.util.Set;
 import java.util.TreeSet;
 import java.util.stream.IntStream;
+import java.util.stream.Stream;
+import org.apache.commons.math3.fraction.BigFraction;
 import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.kingbolt.core.CoherentSystem;
+import org.kingbolt.core.SignatureComparison;
+import org.kingbolt.core.SignatureComparison.Outcome;
 import org.kingbolt.core.Structure;
 import org.kingbolt.core.testing.TruthTable;
 
 /** Coherent systems of few components: how many there are, and their signatures. */
 class SmallOrderTest {
+
+  /** All systems of up to four components: the rows of the table below. */
+  private static final String SYSTEMS =
+      "1 12 1,2 123 13,23 12,13,23 3,12 1,2,3 1234 134,234 "
+          + "124,134,234 34,124 123,124,134,234 34,123,124 14,24,34 "
+          + "24,34,123 14,23 14,24,34,123 14,23,34 14,23,24,34 13,14,23,24 "
+          + "13,14,23,24,34 4,123 12,13,14,23,24,34 4,13,23 4,12,13,23 "
+          + "3,4,12 1,2,3,4";
 
   /**
    * Shaked and Suarez-Llorens, J. Amer. Statist. Assoc. 98 (2003) 693, table 1; Samaniego 2007,
@@ -61,6 +74,60 @@ class SmallOrderTest {
     CoherentSystem system = Structure.ofPathSets(sets(paths)).compile();
     assertEquals(signature, system.signature().toString());
     assertEquals(meanLife, Exact.meanLife(system.signature()).toString().replace(" ", ""));
+    assertEquals(meanLife, system.signature().meanLifetime().toString().replace(" ", ""));
+  }
+
+  private static List<CoherentSystem> systems() {
+    return Stream.of(SYSTEMS.split(" ", -1))
+        .map(paths -> Structure.ofPathSets(sets(paths)).compile())
+        .toList();
+  }
+
+  /**
+   * Samaniego 2007, ch. 3 (from memory): with one more component that does not matter, entry k
+   * becomes ((n-k+1) s_k + (k-1) s_(k-1)) / (n+1).
+   */
+  @Test
+  void longerSignature_followsThePublishedFormula() {
+    for (CoherentSystem system : systems()) {
+      List<BigFraction> shorter = system.signature().fractions();
+      int n = shorter.size();
+      List<BigFraction> longer = system.signature().ofOrder(n + 1).fractions();
+      for (int k = 1; k <= n + 1; k++) {
+        BigFraction same = k > n ? BigFraction.ZERO : shorter.get(k - 1).multiply(n - k + 1);
+        BigFraction before = k == 1 ? BigFraction.ZERO : shorter.get(k - 2).multiply(k - 1);
+        assertEquals(same.add(before).divide(n + 1), longer.get(k - 1));
+      }
+    }
+  }
+
+  /**
+   * Kochar, Mukerjee and Samaniego, Naval Res. Logist. 46 (1999) 507 (from memory): ordered
+   * signatures give ordered reliabilities, and the stronger orders imply the weaker ones.
+   */
+  @Test
+  void orderedSignatures_orderTheLives() {
+    int ordered = 0;
+    for (CoherentSystem one : systems()) {
+      for (CoherentSystem two : systems()) {
+        SignatureComparison outcome = one.signature().compare(two.signature());
+        assertTrue(
+            outcome.hazardRate() == outcome.likelihoodRatio()
+                || outcome.likelihoodRatio() == Outcome.INCOMPARABLE);
+        assertTrue(
+            outcome.stochastic() == outcome.hazardRate()
+                || outcome.hazardRate() == Outcome.INCOMPARABLE);
+        if (outcome.stochastic() == Outcome.SHORTER) {
+          ordered++;
+          for (int i = 1; i < 16; i++) {
+            BigFraction p = new BigFraction(i, 16);
+            BigFraction less = one.polynomial().at(p);
+            assertTrue(less.compareTo(two.polynomial().at(p)) < 0, () -> one + " at " + p);
+          }
+        }
+      }
+    }
+    assertTrue(ordered > 300, "ordered pairs: " + ordered);
   }
 
   /**

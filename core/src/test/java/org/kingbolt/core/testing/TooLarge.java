@@ -108,13 +108,13 @@ public enum TooLarge {
   POLYNOMIAL("counting working states") {
     @Override
     void ask() {
-      Structure.atLeast(300, names(600)).compile().polynomial();
+      Structure.atLeast(600, names(1400)).compile().polynomial();
     }
   },
   POLYNOMIAL_OF_A_GRID("counting working states") {
     @Override
     void ask() {
-      grid(7, 16, false).compile().polynomial();
+      grid(7, 60, false).compile().polynomial();
     }
   },
   LARGE_TREE("compiling the structure") {
