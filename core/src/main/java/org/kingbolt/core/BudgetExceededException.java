@@ -43,8 +43,8 @@ public final class BudgetExceededException extends RuntimeException {
             + allowed
             + " nodes while "
             + work
-            + "; give a larger Budget or heap, compile the parts of the system one by one, or use"
-            + " bounds from its smallest path and cut sets");
+            + "; give a larger Budget or heap, compile the parts of the system one by one, or ask for"
+            + " a certified interval instead, Bounds.of(structure).given(p).within(budget)");
   }
 
   static BudgetExceededException time(String work, Duration allowed, long reached) {
@@ -57,8 +57,8 @@ public final class BudgetExceededException extends RuntimeException {
             + work
             + ", with "
             + reached
-            + " nodes made; give a larger Budget, compile the parts of the system one by one, or"
-            + " use bounds from its smallest path and cut sets");
+            + " nodes made; give a larger Budget, compile the parts of the system one by one, or ask"
+            + " for a certified interval instead, Bounds.of(structure).given(p).within(budget)");
   }
 
   static BudgetExceededException width(FrontierTooWideException wide) {
@@ -66,8 +66,8 @@ public final class BudgetExceededException extends RuntimeException {
         Limit.WIDTH,
         0,
         wide.getMessage()
-            + "; compile the parts of the network one by one, or use bounds from its smallest path"
-            + " and cut sets");
+            + "; compile the parts of the network one by one, or ask for a certified interval"
+            + " instead, Bounds.of(structure).given(p).within(budget)");
   }
 
   static BudgetExceededException interrupted(String work, long reached) {

@@ -170,7 +170,7 @@ class BudgetTest {
             work.doing,
             "a larger Budget",
             "compile the parts of the system one by one",
-            "bounds from its smallest path and cut sets")) {
+            "Bounds.of(structure).given(p).within(budget)")) {
       assertTrue(message.contains(word), message);
     }
     assertEquals(stopped.reached(), work.stoppedBy(Budget.ofNodes(work.nodes)).reached());
@@ -189,7 +189,7 @@ class BudgetTest {
             "with " + stopped.reached() + " nodes made",
             "a larger Budget",
             "compile the parts of the system one by one",
-            "bounds from its smallest path and cut sets")) {
+            "Bounds.of(structure).given(p).within(budget)")) {
       assertTrue(stopped.getMessage().contains(word), stopped.getMessage());
     }
   }
@@ -323,7 +323,7 @@ class BudgetTest {
         List.of(
             "a frontier of 65 nodes is wider than the 64 that a state can hold",
             "compile the parts of the network one by one",
-            "bounds from its smallest path and cut sets")) {
+            "Bounds.of(structure).given(p).within(budget)")) {
       assertTrue(stopped.getMessage().contains(word), stopped.getMessage());
     }
   }

@@ -15,7 +15,8 @@ final class Workloads {
             BusRows.rows(),
             GateRows.rows(),
             ScanRows.rows(),
-            PolynomialRows.rows())
+            PolynomialRows.rows(),
+            IntervalRows.rows())
         .flatMap(List::stream)
         .toList();
   }
