@@ -96,6 +96,7 @@ class PackageBoundariesTest {
             "FrontierTooWideException",
             "MinimalSolutions",
             "NetworkProblem",
+            "NetworkRelaxer",
             "Operator",
             "Scan",
             "SetDiagram",
