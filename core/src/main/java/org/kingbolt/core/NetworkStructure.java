@@ -8,7 +8,10 @@ import java.util.Map;
 import java.util.Objects;
 import java.util.Set;
 import org.kingbolt.core.diagram.Composer;
+import org.kingbolt.core.diagram.NetworkBarriers;
 import org.kingbolt.core.diagram.NetworkProblem;
+import org.kingbolt.core.diagram.NetworkRoutes;
+import org.kingbolt.core.diagram.RouteFinder;
 import org.kingbolt.core.diagram.WorkMeter;
 
 /**
@@ -170,6 +173,11 @@ final class NetworkStructure extends Structure {
   @Override
   Structure dualOver(List<Structure> dualParts) {
     return withDual(!dual, dualParts);
+  }
+
+  @Override
+  List<RouteFinder> routes() {
+    return dual ? List.of(new NetworkBarriers(problem)) : NetworkRoutes.of(problem);
   }
 
   @Override

@@ -5,9 +5,12 @@ import java.util.BitSet;
 import java.util.HashSet;
 import java.util.LinkedHashSet;
 import java.util.List;
+import java.util.Optional;
 import java.util.Set;
 import org.kingbolt.core.diagram.Composer;
+import org.kingbolt.core.diagram.ListedRoutes;
 import org.kingbolt.core.diagram.Operator;
+import org.kingbolt.core.diagram.RouteFinder;
 import org.kingbolt.core.diagram.Templates;
 import org.kingbolt.core.diagram.WorkMeter;
 
@@ -124,6 +127,16 @@ final class RunStructure extends Structure {
   @Override
   Structure dualOver(List<Structure> dualParts) {
     return new RunStructure(k, dualParts, around, !dual);
+  }
+
+  @Override
+  List<RouteFinder> routes() {
+    return dual ? List.of(new ListedRoutes(windows())) : super.routes();
+  }
+
+  @Override
+  Optional<List<BitSet>> slotCuts() {
+    return dual ? Optional.empty() : Optional.of(windows());
   }
 
   @Override
