@@ -6,9 +6,11 @@ import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Objects;
+import java.util.Optional;
 import java.util.Set;
 import org.kingbolt.core.diagram.Composer;
 import org.kingbolt.core.diagram.NetworkBarriers;
+import org.kingbolt.core.diagram.NetworkPaths;
 import org.kingbolt.core.diagram.NetworkProblem;
 import org.kingbolt.core.diagram.NetworkRoutes;
 import org.kingbolt.core.diagram.RouteFinder;
@@ -178,6 +180,13 @@ final class NetworkStructure extends Structure {
   @Override
   List<RouteFinder> routes() {
     return dual ? List.of(new NetworkBarriers(problem)) : NetworkRoutes.of(problem);
+  }
+
+  @Override
+  Optional<NetworkPaths> slotPaths(double[] cost, double limit, WorkMeter meter) {
+    return dual && NetworkPaths.applyTo(problem)
+        ? Optional.of(new NetworkPaths(problem, cost, limit, meter))
+        : Optional.empty();
   }
 
   @Override

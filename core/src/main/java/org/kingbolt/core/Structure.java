@@ -16,6 +16,7 @@ import java.util.function.Predicate;
 import org.jspecify.annotations.Nullable;
 import org.kingbolt.core.diagram.Composer;
 import org.kingbolt.core.diagram.CutTree;
+import org.kingbolt.core.diagram.NetworkPaths;
 import org.kingbolt.core.diagram.RouteFinder;
 import org.kingbolt.core.diagram.ShrinkingRoutes;
 import org.kingbolt.core.diagram.WorkMeter;
@@ -694,6 +695,13 @@ public abstract sealed class Structure implements Serializable
 
   /** Cut sets over the slots, all minimal ones among them, where they stand in a list. */
   Optional<List<BitSet>> slotCuts() {
+    return Optional.empty();
+  }
+
+  /**
+   * The minimal cut sets over the slots up to a cost, where there is a way of one's own to them.
+   */
+  Optional<NetworkPaths> slotPaths(double[] cost, double limit, WorkMeter meter) {
     return Optional.empty();
   }
 

@@ -3,6 +3,7 @@ package org.kingbolt.core;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.BitSet;
+import java.util.Comparator;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
@@ -12,6 +13,7 @@ import java.util.function.Predicate;
 import org.kingbolt.core.TruncatedFamily.CutSet;
 import org.kingbolt.core.diagram.CutTree;
 import org.kingbolt.core.diagram.JoinedRoutes;
+import org.kingbolt.core.diagram.NetworkPaths;
 import org.kingbolt.core.diagram.RouteFinder;
 import org.kingbolt.core.diagram.ShrinkingRoutes;
 import org.kingbolt.core.diagram.WorkMeter;
@@ -102,7 +104,7 @@ final class Truncation {
         }
       }
     }
-    return families[size - 1];
+    return bounded(families[size - 1]);
   }
 
   private int slots(int number) {
@@ -288,18 +290,61 @@ final class Truncation {
       boolean known = component && !part.sets.isEmpty();
       slotWorking[slot] = known ? working[part.sets.get(0).members()[0]] : 1;
     }
-    CutTree tree = new CutTree(slotCost, limit, slotFailing, slotWorking, weighs, meter);
     TruncatedFamily whole = new TruncatedFamily();
+    Optional<NetworkPaths> paths = structure.slotPaths(slotCost, limit, meter);
+    if (paths.isPresent()) {
+      for (int[] cut : paths.get().sets()) {
+        expand(number, cut, false, whole);
+      }
+      if (!paths.get().isComplete()) {
+        whole.giveUp(1);
+      }
+      return bounded(whole);
+    }
+    CutTree tree = new CutTree(slotCost, limit, slotFailing, slotWorking, weighs, meter);
     for (int[] cut : tree.search(structure.routes())) {
       expand(number, cut, false, whole);
     }
     return searched(whole, tree);
   }
 
-  private static TruncatedFamily searched(TruncatedFamily whole, CutTree tree) {
+  private TruncatedFamily searched(TruncatedFamily whole, CutTree tree) {
     whole.discarded = Math.min(1, whole.discarded + tree.discarded());
     whole.complete &= tree.isComplete();
+    return bounded(whole);
+  }
+
+  /**
+   * Bounds what is left out by the probability that none of the sets has failed altogether, which
+   * is at most that of none of a few sets without common components: much where sets are probable,
+   * as path sets are, seen from the dual.
+   */
+  private TruncatedFamily bounded(TruncatedFamily whole) {
+    if (weighs && whole.discarded > 0) {
+      List<CutSet> likely = new ArrayList<>(whole.sets);
+      likely.sort(Comparator.comparingDouble(set -> -set.failing()));
+      BitSet taken = new BitSet();
+      double none = 1;
+      for (CutSet set : likely) {
+        meter.at(likely.size());
+        if (Arrays.stream(set.members()).noneMatch(taken::get)) {
+          Arrays.stream(set.members()).forEach(taken::set);
+          none *= anyWorks(set);
+        }
+      }
+      whole.discarded = Math.min(whole.discarded, none);
+    }
     return whole;
+  }
+
+  private double anyWorks(CutSet set) {
+    double all = 1;
+    double any = 0;
+    for (int member : set.members()) {
+      any += all * working[member];
+      all *= failing[member];
+    }
+    return Math.min(1, any);
   }
 
   /** Searches an operator whose parts share components, over the components. */
