@@ -316,7 +316,7 @@ public final class MinimalSets implements Iterable<Set<String>> {
    * @throws BudgetExceededException if the budget is used up
    */
   public Probability inclusionExclusion(Probabilities p, Budget budget) {
-    WorkMeter meter = Check.notNull(budget, "budget").start("expanding by inclusion–exclusion");
+    WorkMeter meter = Check.notNull(budget, "budget").start("expanding by inclusion-exclusion");
     List<Probability> values = Check.notNull(p, "probabilities").forComponents(components);
     return InclusionExclusion.of(family.walk(meter), values, paths, meter);
   }

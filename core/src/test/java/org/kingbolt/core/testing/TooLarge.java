@@ -131,7 +131,7 @@ public enum TooLarge {
       capacity().minimalCutSets(CutOff.size(40));
     }
   },
-  INCLUSION_EXCLUSION("expanding by inclusion–exclusion") {
+  INCLUSION_EXCLUSION("expanding by inclusion-exclusion") {
     @Override
     void ask() {
       MinimalSets sets = grid(5, 5, false).compile().minimalPathSets();

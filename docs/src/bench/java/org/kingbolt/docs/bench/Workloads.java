@@ -14,6 +14,7 @@ final class Workloads {
             ReliabilityRows.rows(),
             BusRows.rows(),
             GateRows.rows(),
+            SetRows.rows(),
             ScanRows.rows())
         .flatMap(List::stream)
         .toList();
