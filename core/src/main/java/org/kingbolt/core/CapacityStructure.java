@@ -4,9 +4,9 @@ import java.util.ArrayList;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
-import org.kingbolt.core.diagram.CapacityRoutes;
 import org.kingbolt.core.diagram.Composer;
 import org.kingbolt.core.diagram.RouteFinder;
+import org.kingbolt.core.diagram.Routes;
 import org.kingbolt.core.diagram.Templates;
 import org.kingbolt.core.diagram.WorkMeter;
 
@@ -133,7 +133,7 @@ final class CapacityStructure extends Structure {
   @Override
   List<RouteFinder> routes() {
     long[] weights = capacities.stream().mapToLong(Long::longValue).toArray();
-    return List.of(new CapacityRoutes(demand, weights));
+    return List.of(Routes.capacity(demand, weights));
   }
 
   @Override

@@ -10,8 +10,8 @@ import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
 import org.kingbolt.core.diagram.Composer;
-import org.kingbolt.core.diagram.ListedRoutes;
 import org.kingbolt.core.diagram.RouteFinder;
+import org.kingbolt.core.diagram.Routes;
 import org.kingbolt.core.diagram.Templates;
 import org.kingbolt.core.diagram.WorkMeter;
 
@@ -191,12 +191,16 @@ final class FamilyStructure extends Structure {
 
   @Override
   List<RouteFinder> routes() {
-    return paths ? List.of(new ListedRoutes(sets)) : super.routes();
+    return paths ? List.of(Routes.listed(slotSets())) : super.routes();
   }
 
   @Override
-  Optional<List<BitSet>> slotCuts() {
-    return paths ? Optional.empty() : Optional.of(sets);
+  Optional<List<int[]>> slotCuts() {
+    return paths ? Optional.empty() : Optional.of(slotSets());
+  }
+
+  private List<int[]> slotSets() {
+    return sets.stream().map(set -> set.stream().toArray()).toList();
   }
 
   @Override

@@ -5,16 +5,13 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.Collections;
 import java.util.Iterator;
-import java.util.LinkedHashSet;
 import java.util.List;
-import java.util.NoSuchElementException;
 import java.util.Set;
 import java.util.Spliterator;
 import java.util.Spliterators;
 import java.util.stream.Collectors;
 import java.util.stream.Stream;
 import java.util.stream.StreamSupport;
-import org.jspecify.annotations.Nullable;
 import org.kingbolt.core.diagram.SetDiagram;
 import org.kingbolt.core.diagram.SetWalk;
 import org.kingbolt.core.diagram.WorkMeter;
@@ -187,25 +184,8 @@ public final class MinimalSets implements Iterable<Set<String>> {
    */
   @Override
   public Iterator<Set<String>> iterator() {
-    SetWalk walk = family.walkByVariables(Budget.ofHeap().start("listing minimal sets"));
-    return new Iterator<>() {
-      private int @Nullable [] next = walk.next();
-
-      @Override
-      public boolean hasNext() {
-        return next != null;
-      }
-
-      @Override
-      public Set<String> next() {
-        int[] set = next;
-        if (set == null) {
-          throw new NoSuchElementException("there are no more minimal sets");
-        }
-        next = walk.next();
-        return named(set);
-      }
-    };
+    return new NamedSets(
+        components, family.walkByVariables(Budget.ofHeap().start("listing minimal sets")));
   }
 
   /**
@@ -245,7 +225,7 @@ public final class MinimalSets implements Iterable<Set<String>> {
       if (set == null) {
         break;
       }
-      found.add(named(set));
+      found.add(NamedSets.named(components, set));
     }
     return Collections.unmodifiableList(found);
   }
@@ -302,10 +282,9 @@ public final class MinimalSets implements Iterable<Set<String>> {
   }
 
   /**
-   * The system's probability from these sets by inclusion–exclusion (Poincaré): a method in its own
-   * right, for small families, to check others with. Terms of one union of sets are collected. The
-   * sum cancels by nature; it is carried out in exact arithmetic, so that both sides come out to
-   * the last digit.
+   * The system's probability from these sets by inclusion–exclusion: a method in its own right, for
+   * small families, to check others with. Terms of one union of sets are collected. The sum cancels
+   * by nature; exact arithmetic brings out both sides to the last digit.
    *
    * @param p the components' probabilities; components must fail independently. Of each component
    *     the smaller side is taken as it stands, and the other one as 1 minus it, exactly.
@@ -402,16 +381,6 @@ public final class MinimalSets implements Iterable<Set<String>> {
 
   private double side(Probability value) {
     return paths ? value.working() : value.failing();
-  }
-
-  private Set<String> named(int[] set) {
-    int[] sorted = set.clone();
-    Arrays.sort(sorted);
-    Set<String> names = new LinkedHashSet<>();
-    for (int index : sorted) {
-      names.add(components.get(index));
-    }
-    return Collections.unmodifiableSet(names);
   }
 
   /**

@@ -9,11 +9,10 @@ import java.util.Objects;
 import java.util.Optional;
 import java.util.Set;
 import org.kingbolt.core.diagram.Composer;
-import org.kingbolt.core.diagram.NetworkBarriers;
 import org.kingbolt.core.diagram.NetworkPaths;
 import org.kingbolt.core.diagram.NetworkProblem;
-import org.kingbolt.core.diagram.NetworkRoutes;
 import org.kingbolt.core.diagram.RouteFinder;
+import org.kingbolt.core.diagram.Routes;
 import org.kingbolt.core.diagram.WorkMeter;
 
 /**
@@ -179,7 +178,7 @@ final class NetworkStructure extends Structure {
 
   @Override
   List<RouteFinder> routes() {
-    return dual ? List.of(new NetworkBarriers(problem)) : NetworkRoutes.of(problem);
+    return dual ? List.of(Routes.barriers(problem)) : Routes.network(problem);
   }
 
   @Override

@@ -6,7 +6,6 @@ import java.io.ObjectInputStream;
 import java.io.Serializable;
 import java.util.ArrayList;
 import java.util.Arrays;
-import java.util.BitSet;
 import java.util.Collection;
 import java.util.List;
 import java.util.Map;
@@ -18,7 +17,7 @@ import org.kingbolt.core.diagram.Composer;
 import org.kingbolt.core.diagram.CutTree;
 import org.kingbolt.core.diagram.NetworkPaths;
 import org.kingbolt.core.diagram.RouteFinder;
-import org.kingbolt.core.diagram.ShrinkingRoutes;
+import org.kingbolt.core.diagram.Routes;
 import org.kingbolt.core.diagram.WorkMeter;
 
 /**
@@ -690,11 +689,13 @@ public abstract sealed class Structure implements Serializable
 
   /** Finders of path sets over the slots, as a {@link CutTree} takes them; fresh ones. */
   List<RouteFinder> routes() {
-    return List.of(new ShrinkingRoutes(parts.size(), this::evaluate));
+    return List.of(Routes.asked(parts.size(), this::evaluate));
   }
 
-  /** Cut sets over the slots, all minimal ones among them, where they stand in a list. */
-  Optional<List<BitSet>> slotCuts() {
+  /**
+   * Cut sets as slots in increasing order, all minimal ones among them, where they stand in a list.
+   */
+  Optional<List<int[]>> slotCuts() {
     return Optional.empty();
   }
 

@@ -9,13 +9,9 @@ import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 import java.util.Set;
-import java.util.function.Predicate;
 import org.kingbolt.core.TruncatedFamily.CutSet;
 import org.kingbolt.core.diagram.CutTree;
-import org.kingbolt.core.diagram.JoinedRoutes;
 import org.kingbolt.core.diagram.NetworkPaths;
-import org.kingbolt.core.diagram.RouteFinder;
-import org.kingbolt.core.diagram.ShrinkingRoutes;
 import org.kingbolt.core.diagram.WorkMeter;
 
 /**
@@ -136,7 +132,7 @@ final class Truncation {
           ? series(number, sharing, left)
           : failing(number, slots(number) - gate.k() + 1, sharing);
     }
-    Optional<List<BitSet>> listed = structure.slotCuts();
+    Optional<List<int[]>> listed = structure.slotCuts();
     if (listed.isPresent()) {
       return listed(number, listed.get(), sharing);
     }
@@ -258,10 +254,10 @@ final class Truncation {
   }
 
   /** Fails when all slots of a listed set fail. */
-  private TruncatedFamily listed(int number, List<BitSet> cuts, boolean sharing) {
+  private TruncatedFamily listed(int number, List<int[]> cuts, boolean sharing) {
     TruncatedFamily whole = new TruncatedFamily();
-    for (BitSet cut : cuts) {
-      expand(number, cut.stream().toArray(), sharing, whole);
+    for (int[] cut : cuts) {
+      expand(number, cut, sharing, whole);
     }
     algebra.minimize(whole);
     return whole;
@@ -354,7 +350,8 @@ final class Truncation {
     Map<String, Integer> global = new HashMap<>();
     all.forEach(name -> global.put(name, global.size()));
     Numbering inner = new Numbering(structure, meter);
-    int[] members = inner.components().stream().mapToInt(name -> known(global, name)).toArray();
+    int[] members =
+        inner.components().stream().mapToInt(name -> global.getOrDefault(name, 0)).toArray();
     CutTree tree =
         new CutTree(
             Arrays.stream(members).mapToDouble(member -> cost[member]).toArray(),
@@ -364,53 +361,10 @@ final class Truncation {
             weighs,
             meter);
     TruncatedFamily whole = new TruncatedFamily();
-    for (int[] cut : tree.search(componentRoutes(inner))) {
+    for (int[] cut : tree.search(ComponentRoutes.of(inner, meter))) {
       int[] set = Arrays.stream(cut).map(member -> members[member]).sorted().toArray();
       whole.sets.add(algebra.set(set));
     }
     return searched(whole, tree);
-  }
-
-  private static int known(Map<String, Integer> numbers, String name) {
-    return numbers.getOrDefault(name, 0);
-  }
-
-  private static List<RouteFinder> componentRoutes(Numbering inner) {
-    int root = inner.size() - 1;
-    Structure structure = inner.structure(root);
-    int[] componentOf = new int[inner.size()];
-    int components = 0;
-    componentOf[root] = -1;
-    for (int number = 0; number < root; number++) {
-      boolean component = inner.structure(number) instanceof ComponentStructure;
-      componentOf[number] = component ? components++ : -1;
-    }
-    int[] variable = new int[structure.parts().size()];
-    Arrays.setAll(variable, slot -> componentOf[inner.part(root, slot)]);
-    if (Arrays.stream(variable).allMatch(v -> v >= 0)) {
-      return structure.routes().stream()
-          .<RouteFinder>map(finder -> new JoinedRoutes(finder, variable))
-          .toList();
-    }
-    return List.of(new ShrinkingRoutes(components, function(inner, componentOf)));
-  }
-
-  private static Predicate<boolean[]> function(Numbering inner, int[] componentOf) {
-    boolean[] value = new boolean[inner.size()];
-    return works -> {
-      for (int number = 0; number < value.length; number++) {
-        Structure structure = inner.structure(number);
-        if (componentOf[number] >= 0) {
-          value[number] = works[componentOf[number]];
-        } else {
-          boolean[] parts = new boolean[structure.parts().size()];
-          for (int slot = 0; slot < parts.length; slot++) {
-            parts[slot] = value[inner.part(number, slot)];
-          }
-          value[number] = structure.evaluate(parts);
-        }
-      }
-      return value[value.length - 1];
-    };
   }
 }

@@ -124,6 +124,25 @@ class MinimalSetsTest {
     assertTrue(cuts.table(p, 1).endsWith("49.75%\nand 2 more\n"), cuts.table(p, 1));
   }
 
+  @Test
+  void structuresWithoutComponents_haveNoSetsOrTheEmptyOne() {
+    Structure never = Structure.component("a").givenFailed("a");
+    Structure always = Structure.component("a").givenWorking("a");
+    assertEquals(List.of(Set.of()), never.minimalCutSets(CutOff.size(1)).stream().toList());
+    assertEquals(List.of(), never.minimalPathSets(CutOff.size(1)).stream().toList());
+    assertEquals(List.of(), always.minimalCutSets(CutOff.size(1)).stream().toList());
+    assertEquals(List.of(Set.of()), always.minimalPathSets(CutOff.size(1)).stream().toList());
+    assertTrue(always.minimalPathSets(CutOff.size(1)).isComplete());
+  }
+
+  @Test
+  void longLine_hasItsWindowsAsCuts() {
+    String[] names = IntStream.range(0, 100_000).mapToObj(i -> "u" + i).toArray(String[]::new);
+    TruncatedSets cuts = Structure.withoutFailureRun(3, names).minimalCutSets(CutOff.size(3));
+    assertEquals(BigInteger.valueOf(99_998), cuts.sets().count());
+    assertTrue(cuts.isComplete());
+  }
+
   /** 1.4e11 sets in a jumbled order of components, and more than 10^17 without compiling. */
   @Test
   void fewOfVeryMany_areThereAtOnce() {

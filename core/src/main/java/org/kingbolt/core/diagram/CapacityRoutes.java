@@ -5,7 +5,7 @@ import java.util.Comparator;
 import org.jspecify.annotations.Nullable;
 
 /** Path sets of a threshold on a sum of weights: what is free, and the heaviest slots besides. */
-public final class CapacityRoutes implements RouteFinder {
+final class CapacityRoutes implements RouteFinder {
 
   private final long demand;
   private final long[] weight;

@@ -176,7 +176,7 @@ public final class CutTree {
   }
 
   private int @Nullable [] route() {
-    meter.at(found.size() * (2L + failedCount / 8));
+    meter.now(found.size() * (2L + failedCount / 8));
     return finder.find(barred, free);
   }
 

@@ -4,7 +4,7 @@ import java.util.Arrays;
 import org.jspecify.annotations.Nullable;
 
 /** Path sets of an operator some of whose slots hold the same variable. For one thread. */
-public final class JoinedRoutes implements RouteFinder {
+final class JoinedRoutes implements RouteFinder {
 
   private final RouteFinder slots;
   private final int[] variable;

@@ -1,11 +1,10 @@
 package org.kingbolt.core.diagram;
 
-import java.util.BitSet;
 import java.util.List;
 import org.jspecify.annotations.Nullable;
 
 /** Path sets that are listed beforehand: the one with the fewest slots that are not free. */
-public final class ListedRoutes implements RouteFinder {
+final class ListedRoutes implements RouteFinder {
 
   private final int[][] sets;
 
@@ -14,8 +13,8 @@ public final class ListedRoutes implements RouteFinder {
    *
    * @param sets path sets, among them all minimal ones
    */
-  public ListedRoutes(List<BitSet> sets) {
-    this.sets = sets.stream().map(set -> set.stream().toArray()).toArray(int[][]::new);
+  ListedRoutes(List<int[]> sets) {
+    this.sets = sets.toArray(new int[0][]);
   }
 
   @Override

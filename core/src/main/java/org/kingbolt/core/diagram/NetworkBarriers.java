@@ -8,7 +8,7 @@ import org.jspecify.annotations.Nullable;
  * reached over the barred slots alone. A barrier lies where the nodes that are reached end, and
  * holds only what can lead on to the target. For one thread.
  */
-public final class NetworkBarriers implements RouteFinder {
+final class NetworkBarriers implements RouteFinder {
 
   private final NetworkProblem problem;
   private final int[][] at;

@@ -9,7 +9,7 @@ import org.jspecify.annotations.Nullable;
  * Routes through a network from nodes known to be connected to one target more, with the fewest
  * slots that are not free: a search over distances 0, 1, 2 in three turning queues. For one thread.
  */
-public final class NetworkRoutes implements RouteFinder {
+final class NetworkRoutes implements RouteFinder {
 
   private static final int QUEUES = 3;
 

@@ -11,7 +11,7 @@ import org.jspecify.annotations.Nullable;
  *
  * <p>Method: Junker, QuickXplain, AAAI 2004 (from memory), with bisection for the next needed slot.
  */
-public final class ShrinkingRoutes implements RouteFinder {
+final class ShrinkingRoutes implements RouteFinder {
 
   private final int slots;
   private final Predicate<boolean[]> works;
