@@ -5,6 +5,8 @@ import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import org.kingbolt.core.diagram.Composer;
+import org.kingbolt.core.diagram.RouteFinder;
+import org.kingbolt.core.diagram.Routes;
 import org.kingbolt.core.diagram.Templates;
 import org.kingbolt.core.diagram.WorkMeter;
 
@@ -126,6 +128,12 @@ final class CapacityStructure extends Structure {
   Structure dualOver(List<Structure> dualParts) {
     long sum = capacities.stream().mapToLong(Long::longValue).sum();
     return new CapacityStructure(sum - demand + 1, dualParts, capacities);
+  }
+
+  @Override
+  List<RouteFinder> routes() {
+    long[] weights = capacities.stream().mapToLong(Long::longValue).toArray();
+    return List.of(Routes.capacity(demand, weights));
   }
 
   @Override

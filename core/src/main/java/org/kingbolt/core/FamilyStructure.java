@@ -7,8 +7,11 @@ import java.util.LinkedHashMap;
 import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.Set;
 import org.kingbolt.core.diagram.Composer;
+import org.kingbolt.core.diagram.RouteFinder;
+import org.kingbolt.core.diagram.Routes;
 import org.kingbolt.core.diagram.Templates;
 import org.kingbolt.core.diagram.WorkMeter;
 
@@ -184,6 +187,20 @@ final class FamilyStructure extends Structure {
   @Override
   Structure dualOver(List<Structure> dualParts) {
     return new FamilyStructure(!paths, dualParts, sets);
+  }
+
+  @Override
+  List<RouteFinder> routes() {
+    return paths ? List.of(Routes.listed(slotSets())) : super.routes();
+  }
+
+  @Override
+  Optional<List<int[]>> slotCuts() {
+    return paths ? Optional.empty() : Optional.of(slotSets());
+  }
+
+  private List<int[]> slotSets() {
+    return sets.stream().map(set -> set.stream().toArray()).toList();
   }
 
   @Override

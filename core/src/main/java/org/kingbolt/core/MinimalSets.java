@@ -5,27 +5,25 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.Collections;
 import java.util.Iterator;
-import java.util.LinkedHashSet;
 import java.util.List;
-import java.util.NoSuchElementException;
 import java.util.Set;
 import java.util.Spliterator;
 import java.util.Spliterators;
 import java.util.stream.Collectors;
 import java.util.stream.Stream;
 import java.util.stream.StreamSupport;
-import org.jspecify.annotations.Nullable;
 import org.kingbolt.core.diagram.SetDiagram;
 import org.kingbolt.core.diagram.SetWalk;
 import org.kingbolt.core.diagram.WorkMeter;
 
 /**
- * All minimal path sets, or all minimal cut sets, of a system. They are held as a diagram, not as a
- * list: counting does not list them, and streams make them one at a time.
+ * Minimal path sets, or minimal cut sets, of a system: all of them, or those that a question has
+ * selected. They are held as a diagram, not as a list: counting does not list them, and streams
+ * make them one at a time.
  *
- * <p>The order of streams is by size and, within a size, by the order in which the diagram reads
- * the components ({@link CoherentSystem#order()}). The members of a set come in order of {@link
- * CoherentSystem#components()}.
+ * <p>The order of streams is by size and, within a size, by components: sets are compared by their
+ * first members in order of {@link CoherentSystem#components()}, then by the next. The members of a
+ * set come in that order too.
  *
  * <p>Immutable; safe to share between threads; each stream is for one thread.
  *
@@ -66,6 +64,104 @@ public final class MinimalSets implements Iterable<Set<String>> {
   }
 
   /**
+   * Selects the sets of the least size.
+   *
+   * @return these, none where there are no sets
+   * @throws BudgetExceededException if the heap is too small
+   */
+  public MinimalSets smallest() {
+    SetWalk walk = family.walk(selecting());
+    int[] first = walk.next();
+    return first == null ? this : ofSizeAtMost(first.length);
+  }
+
+  /**
+   * Selects the sets of at most so many components, without listing them.
+   *
+   * @param k the largest size that is wanted, at least 0
+   * @return these. Cost: at most k times the nodes of the diagram.
+   * @throws IllegalArgumentException if the size is negative
+   * @throws BudgetExceededException if the heap is too small
+   */
+  public MinimalSets ofSizeAtMost(int k) {
+    if (k < 0) {
+      throw new IllegalArgumentException("size at most " + k + "; it must be 0 or more");
+    }
+    return selected(family.ofSizeAtMost(k, selecting()));
+  }
+
+  /**
+   * Selects the sets that a component is a member of, without listing them.
+   *
+   * @param component one of the system's components
+   * @return these, with the component. Cost: one scan.
+   * @throws IllegalArgumentException if it is not a component of the system
+   * @throws BudgetExceededException if the heap is too small
+   */
+  public MinimalSets containing(String component) {
+    return selected(family.containing(index(component), selecting()));
+  }
+
+  /**
+   * Selects the sets that a component is not a member of, without listing them.
+   *
+   * @param component one of the system's components
+   * @return these. Cost: one scan.
+   * @throws IllegalArgumentException if it is not a component of the system
+   * @throws BudgetExceededException if the heap is too small
+   */
+  public MinimalSets without(String component) {
+    return selected(family.without(index(component), selecting()));
+  }
+
+  private static WorkMeter selecting() {
+    return Budget.ofHeap().start("selecting minimal sets");
+  }
+
+  private MinimalSets selected(SetDiagram some) {
+    return new MinimalSets(components, some, paths);
+  }
+
+  private int index(String component) {
+    int index = components.indexOf(Check.name(component, "component"));
+    if (index < 0) {
+      throw Check.unknown(component, components);
+    }
+    return index;
+  }
+
+  /**
+   * Tells whether a set is one of these.
+   *
+   * @param set components of the system
+   * @return whether exactly this set is among them. Cost: at most one step a component.
+   * @throws IllegalArgumentException if a name is not a component of the system
+   */
+  public boolean contains(Set<String> set) {
+    return family.contains(members(set));
+  }
+
+  /**
+   * Tells whether a set contains one of these: for all minimal path sets, whether the system works
+   * when only these components work; for all minimal cut sets, whether it fails when they fail.
+   *
+   * @param set components of the system
+   * @return whether all members of some set of the family are in it. Cost: one scan.
+   * @throws IllegalArgumentException if a name is not a component of the system
+   */
+  public boolean containsPartOf(Set<String> set) {
+    return family.hasSubset(members(set));
+  }
+
+  private boolean[] members(Set<String> set) {
+    boolean[] members = new boolean[components.size()];
+    for (String name : Check.notNull(set, "set")) {
+      members[index(name)] = true;
+    }
+    return members;
+  }
+
+  /**
    * Streams the sets, smallest first, made one at a time as they are asked for.
    *
    * @return a sequential stream of unmodifiable sets; it ends in a {@link BudgetExceededException}
@@ -88,25 +184,8 @@ public final class MinimalSets implements Iterable<Set<String>> {
    */
   @Override
   public Iterator<Set<String>> iterator() {
-    SetWalk walk = family.walk(Budget.ofHeap().start("listing minimal sets"));
-    return new Iterator<>() {
-      private int @Nullable [] next = walk.next();
-
-      @Override
-      public boolean hasNext() {
-        return next != null;
-      }
-
-      @Override
-      public Set<String> next() {
-        int[] set = next;
-        if (set == null) {
-          throw new NoSuchElementException("there are no more minimal sets");
-        }
-        next = walk.next();
-        return named(set);
-      }
-    };
+    return new NamedSets(
+        components, family.walkByVariables(Budget.ofHeap().start("listing minimal sets")));
   }
 
   /**
@@ -137,10 +216,7 @@ public final class MinimalSets implements Iterable<Set<String>> {
     if (n < 0) {
       throw new IllegalArgumentException("asked for " + n + " sets; ask for 0 or more");
     }
-    double[] logs =
-        Check.notNull(p, "probabilities").forComponents(components).stream()
-            .mapToDouble(value -> Math.log(side(value)))
-            .toArray();
+    double[] logs = Arrays.stream(sides(p)).map(Math::log).toArray();
     WorkMeter meter = Check.notNull(budget, "budget").start("searching the most probable sets");
     SetWalk walk = family.walkByWeight(logs, meter);
     List<Set<String>> found = new ArrayList<>();
@@ -149,7 +225,7 @@ public final class MinimalSets implements Iterable<Set<String>> {
       if (set == null) {
         break;
       }
-      found.add(named(set));
+      found.add(NamedSets.named(components, set));
     }
     return Collections.unmodifiableList(found);
   }
@@ -173,18 +249,138 @@ public final class MinimalSets implements Iterable<Set<String>> {
     return product;
   }
 
-  private double side(Probability value) {
-    return paths ? value.working() : value.failing();
+  /**
+   * Adds up the probabilities of all sets, without listing them: for cut sets, the rare-event
+   * approximation of the system's probability of failing, and an upper bound on it.
+   *
+   * @param p the components' probabilities
+   * @return the sum, which is also the expected number of sets all of whose members have failed (or
+   *     work); at least 0, and above 1 where it says nothing. Cost: one scan.
+   * @throws IllegalArgumentException if components have no probability
+   */
+  public double sumOfProbabilities(Probabilities p) {
+    return family.sumOfWeights(sides(p));
   }
 
-  private Set<String> named(int[] set) {
-    int[] sorted = set.clone();
-    Arrays.sort(sorted);
-    Set<String> names = new LinkedHashSet<>();
-    for (int index : sorted) {
-      names.add(components.get(index));
-    }
-    return Collections.unmodifiableSet(names);
+  private double[] sides(Probabilities p) {
+    return Check.notNull(p, "probabilities").forComponents(components).stream()
+        .mapToDouble(this::side)
+        .toArray();
+  }
+
+  /**
+   * The system's probability from these sets by inclusion–exclusion, within {@link
+   * Budget#ofHeap()}.
+   *
+   * @param p the components' probabilities; components must fail independently
+   * @return see {@link #inclusionExclusion(Probabilities, Budget)}
+   * @throws IllegalArgumentException if components have no probability
+   * @throws BudgetExceededException if there are too many terms
+   */
+  public Probability inclusionExclusion(Probabilities p) {
+    return inclusionExclusion(p, Budget.ofHeap());
+  }
+
+  /**
+   * The system's probability from these sets by inclusion–exclusion: a method in its own right, for
+   * small families, to check others with. Terms of one union of sets are collected. The sum cancels
+   * by nature; exact arithmetic brings out both sides to the last digit.
+   *
+   * @param p the components' probabilities; components must fail independently. Of each component
+   *     the smaller side is taken as it stands, and the other one as 1 minus it, exactly.
+   * @param budget how much work it may cost; a term counts as a node
+   * @return both sides for the structure of which these are all minimal sets. Cost: terms at most 2
+   *     to the number of sets, or of components, whichever is smaller; each of all digits.
+   * @throws IllegalArgumentException if components have no probability
+   * @throws BudgetExceededException if the budget is used up
+   */
+  public Probability inclusionExclusion(Probabilities p, Budget budget) {
+    WorkMeter meter = Check.notNull(budget, "budget").start("expanding by inclusion-exclusion");
+    List<Probability> values = Check.notNull(p, "probabilities").forComponents(components);
+    return InclusionExclusion.of(family.walk(meter), values, paths, meter);
+  }
+
+  /**
+   * The system's probability from these sets by sums of disjoint products, within {@link
+   * Budget#ofHeap()}.
+   *
+   * @param p the components' probabilities; components must fail independently
+   * @return see {@link #disjointProducts(Probabilities, Budget)}
+   * @throws IllegalArgumentException if components have no probability
+   * @throws BudgetExceededException if there are too many terms
+   */
+  public Probability disjointProducts(Probabilities p) {
+    return disjointProducts(p, Budget.ofHeap());
+  }
+
+  /**
+   * The system's probability from these sets by sums of disjoint products: a method in its own
+   * right, for small families, to check others with. Sets are taken smallest first, each without
+   * the states of those before it; what shares nothing with the rest is inverted as a whole.
+   *
+   * <p>Source: Abraham, IEEE Trans. Reliab. 28 (1979) 58; inversion of several variables at once:
+   * Heidtmann, IEEE Trans. Reliab. 38 (1989) 447 (both from memory).
+   *
+   * @param p the components' probabilities; components must fail independently
+   * @param budget how much work it may cost; a set in a term not yet worked out counts as a node
+   * @return both sides for the structure of which these are all minimal sets, each a sum of
+   *     non-negative terms. Cost: exponential in the number of sets at worst.
+   * @throws IllegalArgumentException if components have no probability
+   * @throws BudgetExceededException if the budget is used up
+   */
+  public Probability disjointProducts(Probabilities p, Budget budget) {
+    WorkMeter meter = Check.notNull(budget, "budget").start("expanding by disjoint products");
+    List<Probability> values = Check.notNull(p, "probabilities").forComponents(components);
+    return DisjointProducts.of(family.walk(meter), values, paths, meter);
+  }
+
+  /**
+   * One set in a report.
+   *
+   * @param set its components, unmodifiable
+   * @param size how many these are
+   * @param probability that all of them work, for a path set, or have failed, for a cut set
+   * @param share of the probability in the sum over all sets of the family, from 0 to 1; 0 where
+   *     that sum is 0
+   */
+  public record Row(Set<String> set, int size, double probability, double share) {}
+
+  /**
+   * The sets with their figures, for a report of the caller's own, in the order of {@link
+   * #stream()}, made one at a time.
+   *
+   * @param p the components' probabilities
+   * @return as often iterable as wanted; its iterators may throw as the stream does
+   * @throws IllegalArgumentException if components have no probability
+   */
+  public Iterable<Row> rows(Probabilities p) {
+    double sum = sumOfProbabilities(p);
+    return () -> stream().map(set -> row(set, p, sum)).iterator();
+  }
+
+  private Row row(Set<String> set, Probabilities p, double sum) {
+    double probability = probability(set, p);
+    return new Row(set, set.size(), probability, sum > 0 ? Math.min(1, probability / sum) : 0);
+  }
+
+  /**
+   * The most probable sets as a table with aligned columns: size, components, probability, and the
+   * share in the sum over all sets.
+   *
+   * @param p the components' probabilities
+   * @param n how many rows at most, at least 0
+   * @return lines, each with its end; the last one counts what is not shown
+   * @throws IllegalArgumentException if n is negative, or components have no probability
+   * @throws BudgetExceededException if the search grows too large for the heap
+   */
+  public String table(Probabilities p, int n) {
+    double sum = sumOfProbabilities(p);
+    List<Row> rows = mostProbable(n, p).stream().map(set -> row(set, p, sum)).toList();
+    return SetTable.of(rows, count());
+  }
+
+  private double side(Probability value) {
+    return paths ? value.working() : value.failing();
   }
 
   /**

@@ -6,9 +6,13 @@ import java.util.LinkedHashSet;
 import java.util.List;
 import java.util.Map;
 import java.util.Objects;
+import java.util.Optional;
 import java.util.Set;
 import org.kingbolt.core.diagram.Composer;
+import org.kingbolt.core.diagram.NetworkPaths;
 import org.kingbolt.core.diagram.NetworkProblem;
+import org.kingbolt.core.diagram.RouteFinder;
+import org.kingbolt.core.diagram.Routes;
 import org.kingbolt.core.diagram.WorkMeter;
 
 /**
@@ -170,6 +174,18 @@ final class NetworkStructure extends Structure {
   @Override
   Structure dualOver(List<Structure> dualParts) {
     return withDual(!dual, dualParts);
+  }
+
+  @Override
+  List<RouteFinder> routes() {
+    return dual ? List.of(Routes.barriers(problem)) : Routes.network(problem);
+  }
+
+  @Override
+  Optional<NetworkPaths> slotPaths(double[] cost, double limit, WorkMeter meter) {
+    return dual && NetworkPaths.applyTo(problem)
+        ? Optional.of(new NetworkPaths(problem, cost, limit, meter))
+        : Optional.empty();
   }
 
   @Override

@@ -5,9 +5,13 @@ import java.util.BitSet;
 import java.util.HashSet;
 import java.util.LinkedHashSet;
 import java.util.List;
+import java.util.Optional;
 import java.util.Set;
+import java.util.stream.IntStream;
 import org.kingbolt.core.diagram.Composer;
 import org.kingbolt.core.diagram.Operator;
+import org.kingbolt.core.diagram.RouteFinder;
+import org.kingbolt.core.diagram.Routes;
 import org.kingbolt.core.diagram.Templates;
 import org.kingbolt.core.diagram.WorkMeter;
 
@@ -124,6 +128,27 @@ final class RunStructure extends Structure {
   @Override
   Structure dualOver(List<Structure> dualParts) {
     return new RunStructure(k, dualParts, around, !dual);
+  }
+
+  @Override
+  List<RouteFinder> routes() {
+    return dual ? List.of(Routes.listed(runs())) : super.routes();
+  }
+
+  @Override
+  Optional<List<int[]>> slotCuts() {
+    return dual ? Optional.empty() : Optional.of(runs());
+  }
+
+  /** The runs of k neighbours, each once, their slots in increasing order. */
+  private List<int[]> runs() {
+    int n = parts().size();
+    List<int[]> runs = new ArrayList<>();
+    for (int i = 0; i < (around && k < n ? n : n - k + 1); i++) {
+      int start = i;
+      runs.add(IntStream.range(0, k).map(j -> (start + j) % n).sorted().toArray());
+    }
+    return runs;
   }
 
   @Override

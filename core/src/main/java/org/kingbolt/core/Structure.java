@@ -9,10 +9,15 @@ import java.util.Arrays;
 import java.util.Collection;
 import java.util.List;
 import java.util.Map;
+import java.util.Optional;
 import java.util.Set;
 import java.util.function.Predicate;
 import org.jspecify.annotations.Nullable;
 import org.kingbolt.core.diagram.Composer;
+import org.kingbolt.core.diagram.CutTree;
+import org.kingbolt.core.diagram.NetworkPaths;
+import org.kingbolt.core.diagram.RouteFinder;
+import org.kingbolt.core.diagram.Routes;
 import org.kingbolt.core.diagram.WorkMeter;
 
 /**
@@ -565,6 +570,107 @@ public abstract sealed class Structure implements Serializable
     return Compilation.widestFrontier(this);
   }
 
+  /**
+   * Tells whether the system works when only these components work: whether they are a path set,
+   * minimal or not.
+   *
+   * @param set any of this structure's components
+   * @return φ of the state, as {@link #works(Set)} gives it
+   * @throws IllegalArgumentException if a name is not a component of this structure
+   */
+  public boolean isPathSet(Set<String> set) {
+    return works(set);
+  }
+
+  /**
+   * Tells whether the system fails when exactly these components have failed: whether they are a
+   * cut set, minimal or not.
+   *
+   * @param set any of this structure's components
+   * @return 1 - φ of the state. Cost: linear in the size of the structure.
+   * @throws IllegalArgumentException if a name is not a component of this structure
+   */
+  public boolean isCutSet(Set<String> set) {
+    return SetTests.isCutSet(this, set);
+  }
+
+  /**
+   * Tells whether these components are a path set, and none of them can be spared.
+   *
+   * @param set any of this structure's components
+   * @return whether it is one of the minimal path sets. Cost: one evaluation a member.
+   * @throws IllegalArgumentException if a name is not a component of this structure
+   */
+  public boolean isMinimalPathSet(Set<String> set) {
+    return SetTests.isMinimal(set, this::isPathSet);
+  }
+
+  /**
+   * Tells whether these components are a cut set, and none of them can be spared.
+   *
+   * @param set any of this structure's components
+   * @return whether it is one of the minimal cut sets. Cost: one evaluation a member.
+   * @throws IllegalArgumentException if a name is not a component of this structure
+   */
+  public boolean isMinimalCutSet(Set<String> set) {
+    return SetTests.isMinimal(set, this::isCutSet);
+  }
+
+  /**
+   * Finds the minimal path sets within a cut-off, without compiling, within {@link
+   * Budget#ofHeap()}.
+   *
+   * @param cutOff where to end
+   * @return all of them, see {@link #minimalCutSets(CutOff, Budget)}
+   * @throws IllegalArgumentException if components have no probability where it is needed
+   * @throws BudgetExceededException if there are too many
+   */
+  public TruncatedSets minimalPathSets(CutOff cutOff) {
+    return minimalPathSets(cutOff, Budget.ofHeap());
+  }
+
+  /**
+   * Finds the minimal path sets within a cut-off, without compiling.
+   *
+   * @param cutOff where to end
+   * @param budget how much work it may cost
+   * @return all of them, see {@link #minimalCutSets(CutOff, Budget)}
+   * @throws IllegalArgumentException if components have no probability where it is needed
+   * @throws BudgetExceededException if the budget is used up
+   */
+  public TruncatedSets minimalPathSets(CutOff cutOff, Budget budget) {
+    return TruncatedSets.of(this, true, cutOff, budget);
+  }
+
+  /**
+   * Finds the minimal cut sets within a cut-off, without compiling, within {@link Budget#ofHeap()}.
+   *
+   * @param cutOff where to end
+   * @return all of them, see {@link #minimalCutSets(CutOff, Budget)}
+   * @throws IllegalArgumentException if components have no probability where it is needed
+   * @throws BudgetExceededException if there are too many
+   */
+  public TruncatedSets minimalCutSets(CutOff cutOff) {
+    return minimalCutSets(cutOff, Budget.ofHeap());
+  }
+
+  /**
+   * Finds the minimal cut sets within a cut-off, without compiling: the way for systems that no
+   * diagram holds.
+   *
+   * @param cutOff where to end
+   * @param budget how much work it may cost; a set of up to 16 components counts as a node
+   * @return all that the cut-off lets pass, and a bound on the probability of the others. Cost: for
+   *     gates, that of listing the sets of their parts; for networks, a few searches through the
+   *     graph for each set found and each one tried in vain, which grow with the cut-off as a power
+   *     of the length of routes.
+   * @throws IllegalArgumentException if components have no probability where it is needed
+   * @throws BudgetExceededException if the budget is used up
+   */
+  public TruncatedSets minimalCutSets(CutOff cutOff, Budget budget) {
+    return TruncatedSets.of(this, false, cutOff, budget);
+  }
+
   // ---- what each kind of structure provides -----------------------------------------------------
 
   /** What stands in each slot of this operator; for a component or a constant, nothing. */
@@ -580,6 +686,25 @@ public abstract sealed class Structure implements Serializable
 
   /** The dual operator, over parts that are already the duals of this one's. */
   abstract Structure dualOver(List<Structure> dualParts);
+
+  /** Finders of path sets over the slots, as a {@link CutTree} takes them; fresh ones. */
+  List<RouteFinder> routes() {
+    return List.of(Routes.asked(parts.size(), this::evaluate));
+  }
+
+  /**
+   * Cut sets as slots in increasing order, all minimal ones among them, where they stand in a list.
+   */
+  Optional<List<int[]>> slotCuts() {
+    return Optional.empty();
+  }
+
+  /**
+   * The minimal cut sets over the slots up to a cost, where there is a way of one's own to them.
+   */
+  Optional<NetworkPaths> slotPaths(double[] cost, double limit, WorkMeter meter) {
+    return Optional.empty();
+  }
 
   /** Adds this operator over the expressions of its parts; returns the expression's number. */
   abstract int express(Composer composer, int[] partExpressions, WorkMeter meter);

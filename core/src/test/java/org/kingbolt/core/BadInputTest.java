@@ -7,6 +7,7 @@ import java.time.Duration;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
+import java.util.Set;
 import java.util.function.DoubleConsumer;
 import java.util.function.IntConsumer;
 import java.util.stream.IntStream;
@@ -290,6 +291,20 @@ class BadInputTest {
         illegal("no time", () -> Budget.ofTime(Duration.ZERO), "budget of PT0S", longer),
         illegal("past", () -> Budget.ofTime(Duration.ofSeconds(-1)), "budget of PT-1S", longer),
         illegal("no time added", () -> Budget.ofNodes(5).withTime(Duration.ZERO), "PT0S", longer),
+        illegal("size", () -> CutOff.size(0), "cut-off at size 0", "at least 1"),
+        illegal("sure", () -> CutOff.probability(0, p), "cut-off at probability 0.0", "above 0"),
+        illegal("above", () -> CutOff.probability(1.5, p), "1.5", "at most 1"),
+        illegal("nothing", () -> CutOff.probability(Double.NaN, p), "NaN", "such as 1e-9"),
+        illegal(
+            "uncovered",
+            () -> AB.minimalCutSets(CutOff.probability(0.1, Probabilities.of(Map.of()))),
+            "no probability for \"a\", \"b\""),
+        illegal("largest", () -> cuts.ofSizeAtMost(-1), "size at most -1", "0 or more"),
+        illegal("containing", () -> cuts.containing("c"), "unknown component \"c\""),
+        illegal("without", () -> cuts.without("c"), "unknown component \"c\""),
+        illegal("contains", () -> cuts.contains(Set.of("c")), "unknown component \"c\""),
+        illegal("cut set", () -> AB.isCutSet(Set.of("c")), "unknown component \"c\""),
+        illegal("rows", () -> cuts.table(p, -1), "-1 sets", "0 or more"),
         illegal("sets", () -> cuts.mostProbable(-1, p), "-1 sets", "0 or more"));
   }
 

@@ -149,12 +149,35 @@ class BudgetTest {
     CoherentSystem system = grid(6, 20).connecting("0.0", "5.19").compile();
     Structure grid = grid(6, 6).connecting("0.0", "5.5");
     Structure gates = sharedGates();
+    Structure paths = Structure.ofPathSets(randomSets(300, 6));
+    MinimalSets many = grid(4, 4).connecting("0.0", "3.3").compile().minimalPathSets();
+    Probabilities p = Probabilities.all(0.9);
+    String finding = "while finding minimal cut sets with size at most";
     String deriving = "while deriving the formula";
     return Stream.of(
         new Work("paths", "while finding minimal path sets", 5_000, system::minimalPathSets),
         new Work("cuts", "while finding minimal cut sets", 5_000, system::minimalCutSets),
+        new Work("cuts of a network", finding, 100, b -> truncated(wideGrid(), 8, b)),
+        new Work(
+            "paths of a network",
+            "while finding minimal path sets with size at most 26",
+            100,
+            b -> paths(wideGrid(), 26, b)),
+        new Work("cuts of gates", finding, 100, b -> truncated(sharedGates(), 8, b)),
+        new Work("cuts of capacities", finding, 100, b -> truncated(unequalCapacities(), 20, b)),
+        new Work("cuts of path sets", finding, 20, b -> truncated(paths, 20, b)),
+        new Work("inclusion", "while expanding by incl", 1_000, b -> many.inclusionExclusion(p, b)),
+        new Work("products", "while expanding by disj", 50, b -> many.disjointProducts(p, b)),
         new Work("network formula", deriving, 20, budget -> Derivation.of(grid, budget)),
         new Work("gates formula", deriving, 20, budget -> Derivation.of(gates, budget)));
+  }
+
+  private static TruncatedSets truncated(Structure structure, int size, Budget budget) {
+    return structure.minimalCutSets(CutOff.size(size), budget);
+  }
+
+  private static TruncatedSets paths(Structure structure, int size, Budget budget) {
+    return structure.minimalPathSets(CutOff.size(size), budget);
   }
 
   @ParameterizedTest

@@ -217,7 +217,20 @@ class DeepStructureTest {
     assertClose(recurrence(true, true), onSmallStack(() -> pivot.reliability(P)));
   }
 
-  /** Less deep, since the time grows with the square of the depth. */
+  @Test
+  void truncatedSets_areTheSmallestOfTheDeepLadder() throws Exception {
+    TruncatedSets paths = onSmallStack(() -> DEEP.minimalPathSets(CutOff.size(3)));
+    TruncatedSets cuts = onSmallStack(() -> DEEP.minimalCutSets(CutOff.size(3)));
+    MinimalSets allPaths = onSmallStack(system::minimalPathSets);
+    MinimalSets allCuts = onSmallStack(system::minimalCutSets);
+    assertEquals(
+        onSmallStack(() -> allPaths.ofSizeAtMost(3).stream().toList()), paths.stream().toList());
+    assertEquals(
+        onSmallStack(() -> allCuts.ofSizeAtMost(3).stream().toList()), cuts.stream().toList());
+    assertTrue(onSmallStack(() -> cuts.discarded(P)) < 1);
+  }
+
+  /** Less deep, since sizes far apart need a bit each. */
   @Test
   void minimalSets_beginWithTheSmallestAndTheMostProbable() throws Exception {
     CoherentSystem ladder = onSmallStack(() -> ladder("y", DEPTH / 5).compile());

@@ -4,7 +4,9 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
+import java.math.BigInteger;
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.HashSet;
 import java.util.Iterator;
 import java.util.List;
@@ -101,6 +103,61 @@ class MinimalSetsTest {
             });
     assertEquals(BudgetExceededException.Limit.NODES, stopped.limit());
     assertTrue(stopped.reached() > nodes, () -> "reached " + stopped.reached());
+  }
+
+  @Test
+  void table_isAligned() {
+    Structure bridge =
+        Structure.ofCutSets(
+            List.of(List.of("line", "bus tie"), List.of("busbar"), List.of("line", "relay")));
+    Probabilities p =
+        Probabilities.all(Probability.failing(0.01)).with("busbar", Probability.failing(1e-6));
+    MinimalSets cuts = bridge.compile().minimalCutSets();
+    String expected =
+        """
+        size  components     probability   share
+           2  line, bus tie   1.0000e-04  49.75%
+           2  line, relay     1.0000e-04  49.75%
+           1  busbar          1.0000e-06   0.50%
+        """;
+    assertEquals(expected, cuts.table(p, 5));
+    assertTrue(cuts.table(p, 1).endsWith("49.75%\nand 2 more\n"), cuts.table(p, 1));
+  }
+
+  @Test
+  void structuresWithoutComponents_haveNoSetsOrTheEmptyOne() {
+    Structure never = Structure.component("a").givenFailed("a");
+    Structure always = Structure.component("a").givenWorking("a");
+    assertEquals(List.of(Set.of()), never.minimalCutSets(CutOff.size(1)).stream().toList());
+    assertEquals(List.of(), never.minimalPathSets(CutOff.size(1)).stream().toList());
+    assertEquals(List.of(), always.minimalCutSets(CutOff.size(1)).stream().toList());
+    assertEquals(List.of(Set.of()), always.minimalPathSets(CutOff.size(1)).stream().toList());
+    assertTrue(always.minimalPathSets(CutOff.size(1)).isComplete());
+  }
+
+  @Test
+  void longLine_hasItsWindowsAsCuts() {
+    String[] names = IntStream.range(0, 100_000).mapToObj(i -> "u" + i).toArray(String[]::new);
+    TruncatedSets cuts = Structure.withoutFailureRun(3, names).minimalCutSets(CutOff.size(3));
+    assertEquals(BigInteger.valueOf(99_998), cuts.sets().count());
+    assertTrue(cuts.isComplete());
+  }
+
+  /** 1.4e11 sets in a jumbled order of components, and more than 10^17 without compiling. */
+  @Test
+  void fewOfVeryMany_areThereAtOnce() {
+    String[] names = IntStream.range(0, 40).mapToObj(i -> "u" + i * 7 % 40).toArray(String[]::new);
+    List<String> order = IntStream.range(0, 40).mapToObj(i -> "u" + i * 11 % 40).toList();
+    MinimalSets sets =
+        Structure.atLeast(20, names).compile(order, Budget.ofNodes(1_000)).minimalPathSets();
+    assertEquals(new BigInteger("137846528820"), sets.count());
+    List<Set<String>> first = sets.stream().limit(10).toList();
+    assertEquals(Set.of(Arrays.copyOf(names, 20)), first.get(0));
+    assertEquals(10, new HashSet<>(first).size());
+    assertEquals(10, sets.mostProbable(10, Probabilities.all(0.9)).size());
+    assertEquals(0, sets.ofSizeAtMost(19).count().signum());
+    assertEquals(sets.count(), sets.smallest().count());
+    assertEquals(new BigInteger("68923264410"), sets.containing("u3").count());
   }
 
   @Test

@@ -88,6 +88,7 @@ class NullArgumentTest {
   static Stream<BadCall> questions() {
     Set<String> nullMember = new HashSet<>(Arrays.asList("a", null));
     MinimalSets cuts = SYSTEM.minimalCutSets();
+    TruncatedSets truncated = AB.minimalCutSets(CutOff.size(1));
     return Stream.of(
         isNull("works", () -> AB.works(null), "the set of working components"),
         isNull("works member", () -> AB.works(nullMember), "a name in the set"),
@@ -99,6 +100,26 @@ class NullArgumentTest {
         isNull("evaluation", () -> SYSTEM.evaluation(null), "probabilities"),
         isNull("paths", () -> SYSTEM.minimalPathSets(null), "budget"),
         isNull("cuts", () -> SYSTEM.minimalCutSets(null), "budget"),
+        isNull("cut-off", () -> AB.minimalPathSets((CutOff) null), "cut-off"),
+        isNull("cut-off", () -> AB.minimalCutSets(CutOff.size(1), null), "budget"),
+        isNull("cut-off", () -> CutOff.probability(0.1, null), "probabilities"),
+        isNull("discarded", () -> truncated.discarded(null), "probabilities"),
+        isNull("discarded", () -> truncated.discarded(Probabilities.all(0.5), null), "budget"),
+        isNull("path set", () -> AB.isPathSet(null), "the set of working components"),
+        isNull("cut set", () -> AB.isCutSet(null), "the set of failed components"),
+        isNull("cut set member", () -> AB.isCutSet(nullMember), "a name in the set of failed"),
+        isNull("containing", () -> cuts.containing(null), "component"),
+        isNull("without", () -> cuts.without(null), "component"),
+        isNull("contains", () -> cuts.contains(null), "set"),
+        isNull("contains member", () -> cuts.contains(nullMember), "component"),
+        isNull("part", () -> cuts.containsPartOf(null), "set"),
+        isNull("sum", () -> cuts.sumOfProbabilities(null), "probabilities"),
+        isNull("rows", () -> cuts.rows(null), "probabilities"),
+        isNull("table", () -> cuts.table(null, 1), "probabilities"),
+        isNull("expansion", () -> cuts.inclusionExclusion(null), "probabilities"),
+        isNull("expansion", () -> cuts.inclusionExclusion(Probabilities.all(0.5), null), "budget"),
+        isNull("products", () -> cuts.disjointProducts(null), "probabilities"),
+        isNull("products", () -> cuts.disjointProducts(Probabilities.all(0.5), null), "budget"),
         isNull("pivot", () -> SYSTEM.pivot("a").reliability(null), "probabilities"),
         isNull("equation", () -> SYSTEM.pivot("a").equation(null), "probabilities"),
         isNull("polynomial", () -> SYSTEM.polynomial().at(NO_PROBABILITY), "probability"),

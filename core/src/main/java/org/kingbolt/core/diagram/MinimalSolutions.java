@@ -8,7 +8,9 @@ import java.util.Arrays;
  *
  * <p>Source: Rauzy, New algorithms for fault trees analysis, Reliab. Eng. Syst. Saf. 40 (1993) 203
  * (from memory). Bottom-up over the diagram; the one operation needed takes out of a family the
- * sets that already suffice for a smaller function. Explicit stack.
+ * sets that already suffice for a smaller function. Explicit stack. Routes that leave out many
+ * variables in a row are followed by jump pointers (Myers, Inf. Process. Lett. 17 (1983) 241, from
+ * memory), so that long chains cost a logarithm a step.
  */
 public final class MinimalSolutions {
 
@@ -22,6 +24,12 @@ public final class MinimalSolutions {
   private final boolean paths;
 
   private final int[] levelOf;
+
+  /** For each node, how many variables can be left out below it, and a node further down there. */
+  private final int[] depth;
+
+  private final int[] jump;
+
   private final UniqueTable table;
   private int[] cache = new int[FIRST_CACHE * 3];
   private int[] stack = new int[FRAME << 6];
@@ -34,6 +42,16 @@ public final class MinimalSolutions {
     Arrays.fill(levelOf, 0, 2, diagram.levels());
     for (int level = 0; level < diagram.levels(); level++) {
       Arrays.fill(levelOf, diagram.from(level), diagram.to(level), level);
+    }
+    this.depth = new int[diagram.size()];
+    this.jump = new int[diagram.size()];
+    jump[1] = 1;
+    for (int id = 2; id < jump.length; id++) {
+      int next = leavingOut(id);
+      int far = jump[next];
+      boolean asFar = depth[next] - depth[far] == depth[far] - depth[jump[far]];
+      depth[id] = depth[next] + 1;
+      jump[id] = asFar ? jump[far] : next;
     }
   }
 
@@ -66,7 +84,8 @@ public final class MinimalSolutions {
       for (int id = diagram.from(level); id < diagram.to(level); id++) {
         int leaves = leavingOut(id);
         int larger = suffices(leaves) ? SetDiagram.NO_SETS : solution[adding(id)];
-        solution[id] = node(level, solution[leaves], without(larger, leaves));
+        int needed = larger == solution[leaves] ? SetDiagram.NO_SETS : without(larger, leaves);
+        solution[id] = node(level, solution[leaves], needed);
       }
     }
     return new SetDiagram(table.sorted(solution[diagram.root()], diagram.order()));
@@ -98,10 +117,11 @@ public final class MinimalSolutions {
     int curFamily = family;
     int curFunction = function;
     while (true) {
-      while (levelOf[curFunction] < table.level(curFamily)) {
-        curFunction = leavingOut(curFunction);
+      int result = settled(curFamily, curFunction);
+      if (result < 0) {
+        curFunction = downTo(table.level(curFamily), curFunction);
+        result = known(curFamily, curFunction);
       }
-      int result = known(curFamily, curFunction);
       if (result < 0) {
         if (sp + FRAME > stack.length) {
           stack = Arrays.copyOf(stack, stack.length << 1);
@@ -142,12 +162,28 @@ public final class MinimalSolutions {
     return add ? adding(function) : leavingOut(function);
   }
 
-  private int known(int family, int function) {
-    if (family == SetDiagram.NO_SETS || neverSuffices(function)) {
-      return family;
+  /** The function after all variables above a level are left out. */
+  private int downTo(int level, int function) {
+    int at = function;
+    while (levelOf[at] < level) {
+      at = levelOf[jump[at]] <= level ? jump[at] : leavingOut(at);
     }
+    return at;
+  }
+
+  /** What needs no search; the empty set suffices for no function but a constant. */
+  private int settled(int family, int function) {
     if (suffices(function)) {
       return SetDiagram.NO_SETS;
+    }
+    boolean all = family <= SetDiagram.ONLY_EMPTY_SET || neverSuffices(function);
+    return all ? family : -1;
+  }
+
+  private int known(int family, int function) {
+    int result = settled(family, function);
+    if (result >= 0) {
+      return result;
     }
     int at = slot(family, function);
     return cache[at] == family && cache[at + 1] == function ? cache[at + 2] : -1;

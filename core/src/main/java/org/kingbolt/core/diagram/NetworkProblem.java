@@ -20,6 +20,7 @@ public final class NetworkProblem {
   final int source;
   final boolean[] target;
   final boolean directed;
+  private final int[][] linksAt;
 
   /**
    * Describes a network.
@@ -53,6 +54,7 @@ public final class NetworkProblem {
       anyArc |= isArc;
     }
     this.directed = anyArc;
+    this.linksAt = incidence();
   }
 
   /**
@@ -67,7 +69,7 @@ public final class NetworkProblem {
     }
     boolean[] reached = new boolean[nodes()];
     int[] queue = new int[nodes()];
-    int[][] at = linksAt();
+    int[][] at = linksAt;
     reached[source] = true;
     queue[0] = source;
     int filled = 1;
@@ -111,6 +113,10 @@ public final class NetworkProblem {
 
   /** Links at each node, in order of their numbers. */
   int[][] linksAt() {
+    return linksAt;
+  }
+
+  private int[][] incidence() {
     int[] degree = new int[nodes()];
     for (int link = 0; link < links(); link++) {
       degree[from[link]]++;

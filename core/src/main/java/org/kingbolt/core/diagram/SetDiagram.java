@@ -2,6 +2,7 @@ package org.kingbolt.core.diagram;
 
 import java.math.BigInteger;
 import java.util.Arrays;
+import java.util.List;
 
 /**
  * A family of sets of variables as a zero-suppressed decision diagram (Minato, DAC 1993): a set
@@ -23,6 +24,19 @@ public final class SetDiagram {
 
   SetDiagram(Diagram nodes) {
     this.nodes = nodes;
+  }
+
+  /**
+   * Makes a family of listed sets.
+   *
+   * @param variables the number of variables
+   * @param sets sets of variables in increasing order, none of them a part of another one, in
+   *     lexicographic order
+   * @param meter hears of every node
+   * @return the family, its variables in order of their numbers. Cost: linear in the sets' members.
+   */
+  public static SetDiagram of(int variables, List<int[]> sets, WorkMeter meter) {
+    return new SetDiagram(SetSelection.listed(variables, sets, meter));
   }
 
   /**
@@ -100,6 +114,93 @@ public final class SetDiagram {
       }
     }
     return id == ONLY_EMPTY_SET;
+  }
+
+  /**
+   * Tells whether a set contains some set of the family.
+   *
+   * @param members indexed by variable: true for the variables of the set
+   * @return whether all variables of some set of the family are among them. Cost: one scan.
+   */
+  public boolean hasSubset(boolean[] members) {
+    boolean[] has = new boolean[nodes.size()];
+    has[ONLY_EMPTY_SET] = true;
+    for (int level = nodes.levels() - 1; level >= 0; level--) {
+      boolean member = members[nodes.variableAt(level)];
+      for (int id = nodes.from(level); id < nodes.to(level); id++) {
+        has[id] = has[nodes.low(id)] || (member && has[nodes.high(id)]);
+      }
+    }
+    return has[nodes.root()];
+  }
+
+  /**
+   * Adds up the weights of all sets, the products of their variables' weights.
+   *
+   * @param weights indexed by variable, at least 0
+   * @return the sum. Cost: one scan.
+   */
+  public double sumOfWeights(double[] weights) {
+    double[] sum = new double[nodes.size()];
+    sum[ONLY_EMPTY_SET] = 1;
+    for (int level = nodes.levels() - 1; level >= 0; level--) {
+      double weight = weights[nodes.variableAt(level)];
+      for (int id = nodes.from(level); id < nodes.to(level); id++) {
+        sum[id] = sum[nodes.low(id)] + weight * sum[nodes.high(id)];
+      }
+    }
+    return sum[nodes.root()];
+  }
+
+  /**
+   * Selects the sets that contain a variable.
+   *
+   * @param variable of the order
+   * @param meter hears of every node
+   * @return the smaller family. Cost: one scan.
+   */
+  public SetDiagram containing(int variable, WorkMeter meter) {
+    return new SetDiagram(SetSelection.with(nodes, variable, true, meter));
+  }
+
+  /**
+   * Selects the sets that do not contain a variable.
+   *
+   * @param variable of the order
+   * @param meter hears of every node
+   * @return the smaller family. Cost: one scan.
+   */
+  public SetDiagram without(int variable, WorkMeter meter) {
+    return new SetDiagram(SetSelection.with(nodes, variable, false, meter));
+  }
+
+  /**
+   * Selects the sets of at most so many variables.
+   *
+   * @param size at least 0
+   * @param meter hears of every node
+   * @return the smaller family, this one if it has no larger sets. Cost: at most the nodes times
+   *     the size.
+   */
+  public SetDiagram ofSizeAtMost(int size, WorkMeter meter) {
+    return new SetDiagram(SetSelection.atMost(nodes, size, meter));
+  }
+
+  /**
+   * Walks over the family in order of size and, within a size, in lexicographic order of variables:
+   * sets are compared by their smallest variables, then by the next.
+   *
+   * @param meter hears of every step
+   * @return a fresh walk; nothing is listed in advance. Cost: where levels are in order of
+   *     variables, as for {@link #walk}; otherwise the sets of one size at a time are selected, a
+   *     scan over the nodes for every size still open, and split by one variable after the other.
+   */
+  public SetWalk walkByVariables(WorkMeter meter) {
+    boolean inOrder = true;
+    for (int level = 1; level < nodes.levels(); level++) {
+      inOrder &= nodes.variableAt(level - 1) < nodes.variableAt(level);
+    }
+    return inOrder ? walk(meter) : new VariableWalk(nodes, meter);
   }
 
   /**

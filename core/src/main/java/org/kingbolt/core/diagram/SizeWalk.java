@@ -110,7 +110,8 @@ final class SizeWalk implements SetWalk {
     return last < 0 ? 0 : last < 63 ? (2L << last) - 1 : -1;
   }
 
-  private boolean has(int id, int wanted) {
+  /** Whether a set of a size ends below a node; known up to the size moved on to. */
+  boolean has(int id, int wanted) {
     if (wanted < smallest[id] || wanted > largest[id]) {
       return false;
     }
@@ -123,16 +124,28 @@ final class SizeWalk implements SetWalk {
     if (retreat()) {
       return set();
     }
+    if (!nextSize()) {
+      return null;
+    }
+    depth = 0;
+    descend(nodes.root(), size);
+    return set();
+  }
+
+  /** Moves on to the next size of which there are sets; false when there is none. */
+  boolean nextSize() {
     while (size < largest[nodes.root()]) {
       makePlanes(size + 1);
       size++;
       if (has(nodes.root(), size)) {
-        depth = 0;
-        descend(nodes.root(), size);
-        return set();
+        return true;
       }
     }
-    return null;
+    return false;
+  }
+
+  int size() {
+    return size;
   }
 
   /** Goes down, taking a variable wherever a set of the wanted size allows it. */

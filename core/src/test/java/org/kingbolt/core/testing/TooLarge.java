@@ -12,7 +12,9 @@ import java.util.Set;
 import org.kingbolt.core.Budget;
 import org.kingbolt.core.BudgetExceededException;
 import org.kingbolt.core.CoherentSystem;
+import org.kingbolt.core.CutOff;
 import org.kingbolt.core.Derivation;
+import org.kingbolt.core.MinimalSets;
 import org.kingbolt.core.NetworkBuilder;
 import org.kingbolt.core.Probabilities;
 import org.kingbolt.core.Structure;
@@ -103,6 +105,37 @@ public enum TooLarge {
     void ask() {
       CoherentSystem system = Structure.atLeast(400, names(800)).compile();
       system.minimalPathSets().mostProbable(2_000_000, Probabilities.all(0.9));
+    }
+  },
+  CUTS_OF_A_GATE("finding minimal cut sets with size at most 5") {
+    @Override
+    void ask() {
+      Structure.atLeast(196, names(200)).minimalCutSets(CutOff.size(5));
+    }
+  },
+  CUTS_OF_SHARED_GATES("finding minimal cut sets with size at most 12") {
+    @Override
+    void ask() {
+      sharedGates(300, 600).minimalCutSets(CutOff.size(12));
+    }
+  },
+  PATHS_OF_A_NETWORK("finding minimal path sets with size at most 60") {
+    @Override
+    void ask() {
+      grid(16, 16, false).minimalPathSets(CutOff.size(60));
+    }
+  },
+  CUTS_OF_CAPACITIES("finding minimal cut sets with size at most 40") {
+    @Override
+    void ask() {
+      capacity().minimalCutSets(CutOff.size(40));
+    }
+  },
+  INCLUSION_EXCLUSION("expanding by inclusion-exclusion") {
+    @Override
+    void ask() {
+      MinimalSets sets = grid(5, 5, false).compile().minimalPathSets();
+      sets.inclusionExclusion(Probabilities.all(0.9));
     }
   },
   POLYNOMIAL("counting working states") {

@@ -16,7 +16,8 @@ final class Workloads {
             GateRows.rows(),
             ScanRows.rows(),
             PolynomialRows.rows(),
-            IntervalRows.rows())
+            IntervalRows.rows(),
+            SetRows.rows())
         .flatMap(List::stream)
         .toList();
   }
