@@ -99,6 +99,7 @@ class PackageBoundariesTest {
             "Operator",
             "Scan",
             "SetDiagram",
+            "SetUnion",
             "SetWalk",
             "StateCounts",
             "Templates",
