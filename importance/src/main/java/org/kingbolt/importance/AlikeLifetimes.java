@@ -8,7 +8,6 @@ import org.apache.commons.math3.fraction.BigFraction;
 import org.kingbolt.core.Budget;
 import org.kingbolt.core.CoherentSystem;
 import org.kingbolt.core.diagram.Diagram;
-import org.kingbolt.core.diagram.Evaluation;
 import org.kingbolt.core.diagram.StateCounts;
 import org.kingbolt.core.diagram.WorkMeter;
 
@@ -32,7 +31,7 @@ final class AlikeLifetimes {
       meter.now(system.diagram().size());
       Arrays.fill(working, rule.point(k));
       Arrays.fill(failing, rule.complement(k));
-      double[] derivatives = Evaluation.of(system.diagram(), working, failing).derivatives();
+      double[] derivatives = Gradient.of(system.diagram(), working, failing).derivatives();
       for (int i = 0; i < n; i++) {
         values[i] += rule.weight(k) * derivatives[i];
       }

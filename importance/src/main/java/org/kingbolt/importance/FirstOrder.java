@@ -6,7 +6,6 @@ import java.util.function.Supplier;
 import org.kingbolt.core.CoherentSystem;
 import org.kingbolt.core.Probabilities;
 import org.kingbolt.core.Probability;
-import org.kingbolt.core.diagram.Evaluation;
 import org.kingbolt.core.diagram.Scan;
 
 /**
@@ -17,6 +16,9 @@ import org.kingbolt.core.diagram.Scan;
  * <p>Immutable; safe to share between threads.
  */
 final class FirstOrder {
+
+  /** A difference of at least this share of its terms is good enough. */
+  private static final double SHARE = 0.125;
 
   private final List<String> components;
   private final double[] working;
@@ -30,10 +32,10 @@ final class FirstOrder {
     this.components = system.components();
     this.working = working;
     this.failing = failing;
-    Evaluation evaluation = Evaluation.of(system.diagram(), working, failing);
-    this.works = Math.min(1, evaluation.works());
-    this.fails = Math.min(1, evaluation.fails());
-    this.derivatives = evaluation.derivatives();
+    Gradient gradient = Gradient.of(system.diagram(), working, failing);
+    this.works = gradient.works();
+    this.fails = gradient.fails();
+    this.derivatives = gradient.refined();
     this.failsGivenWorking = Suppliers.memoize(() -> failsGivenWorking(system, working, failing));
   }
 
@@ -98,9 +100,10 @@ final class FirstOrder {
     return derivatives.clone();
   }
 
-  /** F(1_i), without a difference. */
+  /** F(1_i) = F - q_i B_i, where that keeps its digits, and elsewhere by another pass. */
   double failsGivenWorking(int i) {
-    return failsGivenWorking.get()[i];
+    double left = fails - failing[i] * derivatives[i];
+    return left >= SHARE * fails ? left : failsGivenWorking.get()[i];
   }
 
   /** F(0_i) = F + p_i B_i. */
