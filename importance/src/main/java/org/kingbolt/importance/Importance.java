@@ -134,7 +134,7 @@ public final class Importance {
    * @return from 0 to 1, adding up to 1; right to about 1e-9, by the rule of {@link
    *     #barlowProschan(Map)}. Cost: some hundred passes.
    * @throws IllegalArgumentException if a component has no lifetime, or one that can be 0, or the
-   *     gains are not finite
+   *     means are not finite or hang on times that are survived with less than 1e-12
    * @throws org.kingbolt.core.BudgetExceededException if the thread is interrupted
    */
   public Ranking natvig(Map<String, ? extends RealDistribution> lifetimes) {

@@ -184,8 +184,8 @@ public final class JointImportance {
   @Override
   public String toString() {
     List<Pair> shown = top(10);
-    int first = width(shown.stream().map(Pair::first).toList());
-    int second = width(shown.stream().map(Pair::second).toList());
+    int first = Math.max(5, Names.width(shown.stream().map(Pair::first).toList()));
+    int second = Math.max(6, Names.width(shown.stream().map(Pair::second).toList()));
     StringBuilder table = new StringBuilder();
     table.append(Names.padded("first", first)).append("  ");
     table.append(Names.padded("second", second)).append("  joint importance");
@@ -195,9 +195,5 @@ public final class JointImportance {
       table.append(String.format(Locale.ROOT, "  %+.6e", pair.value));
     }
     return table.toString();
-  }
-
-  private static int width(List<String> names) {
-    return Math.max(6, Names.width(names));
   }
 }

@@ -19,6 +19,10 @@ final class LifetimeImportance {
   private static final double TAIL = 1e-12;
 
   private static final double STRIDE = 8;
+
+  /** The largest share that the second half of the time may have. */
+  private static final double HEAVY = 0.01;
+
   private static final double ALLOWED = 1e-9;
   private static final double EARLIEST = 1e-280;
   private static final double LATEST = 1e280;
@@ -84,14 +88,15 @@ final class LifetimeImportance {
     for (double at = from; at < to; at *= STRIDE) {
       crude += DoubleStream.of(quadrature.once(at, Math.min(to, at * STRIDE))).sum();
     }
+    double last = DoubleStream.of(quadrature.once(to / 2, to)).sum();
+    if (!(last <= HEAVY * crude)) {
+      throw new IllegalArgumentException(
+          "much of the expected gains lies where the system survives with less than 1e-12; give"
+              + " lifetimes whose means are finite and do not hang on such times");
+    }
     double[] values = integrate(quadrature, from, to, crude);
     double total = DoubleStream.of(values).sum();
-    double last = Double.POSITIVE_INFINITY;
-    for (double at = to; last > TAIL * total; at *= STRIDE) {
-      if (at > LATEST) {
-        throw new IllegalArgumentException(
-            "the expected gains do not end; give lifetimes whose means are finite");
-      }
+    for (double at = to; last > TAIL * total && at < LATEST; at *= STRIDE) {
       double[] more = integrate(quadrature, at, at * STRIDE, total);
       Arrays.setAll(values, i -> values[i] + more[i]);
       last = DoubleStream.of(more).sum();
