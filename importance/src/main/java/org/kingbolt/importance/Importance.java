@@ -74,8 +74,8 @@ public final class Importance {
    * <p>Source: Barlow &amp; Proschan, Importance of system components and fault tree events,
    * Stochastic Processes Appl. 3 (1975) 153. Needs no probabilities.
    *
-   * @return from 0 to 1, adding up to 1; exact but for rounding. Cost: for n components, n / 2
-   *     passes, by a quadrature that is exact for polynomials of their degree.
+   * @return from 0 to 1, adding up to 1, a group's being the sum; exact but for rounding. Cost: for
+   *     n components, n / 2 passes, by a quadrature that is exact for polynomials of their degree.
    * @throws org.kingbolt.core.BudgetExceededException if the thread is interrupted
    */
   public Ranking barlowProschan() {
