@@ -59,7 +59,7 @@ public final class Importance {
    * @return from 0, for irrelevant components, to 1. Cost: two scans of the diagram.
    */
   public Ranking structural() {
-    return Ranking.ofParts(
+    return Ranking.of(
         "Birnbaum structural importance",
         system.components(),
         system.evaluation(Probabilities.all(0.5)).derivatives());

@@ -95,7 +95,7 @@ class MeasuresTest {
     ImportanceAtProbabilities at = Importance.of(sample.structure()).given(p);
     var system = sample.structure().compile();
     double total = at.differentialUniform().total().orElseThrow();
-    double slope = at.birnbaum().total().orElseThrow();
+    double slope = at.birnbaum().asMap().values().stream().mapToDouble(b -> b).sum();
     assertEquals(slope == 0 ? 0 : 1, total, 1e-14);
     for (String name : system.components()) {
       double up = system.reliability(p.with(name, Probability.CERTAIN)).working();
@@ -103,10 +103,9 @@ class MeasuresTest {
       assertEquals(up - down, at.birnbaum().value(name), 1e-14);
       double criticality = at.criticalityFailing().value(name);
       assertEquals(1 - 1 / at.riskReductionWorth().value(name), criticality, 1e-13);
-      assertEquals(
-          slope == 0 ? 0 : at.birnbaum().value(name) / slope,
-          at.birnbaum().share(name).orElseThrow(),
-          1e-14);
+      double share = slope == 0 ? 0 : at.birnbaum().value(name) / slope;
+      assertEquals(share, at.differentialUniform().value(name), 1e-14);
+      assertEquals(share, at.differentialUniform().share(name).orElseThrow(), 1e-14);
     }
   }
 
