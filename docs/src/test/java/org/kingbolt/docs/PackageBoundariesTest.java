@@ -104,6 +104,7 @@ class PackageBoundariesTest {
             "Routes",
             "Scan",
             "SetDiagram",
+            "SetUnion",
             "SetWalk",
             "StateCounts",
             "Templates",

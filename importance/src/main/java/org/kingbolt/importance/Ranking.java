@@ -9,14 +9,20 @@ import java.util.List;
 import java.util.Locale;
 import java.util.Map;
 import java.util.Objects;
+import java.util.OptionalDouble;
 import java.util.stream.Collectors;
+import java.util.stream.DoubleStream;
 import java.util.stream.IntStream;
 
 /**
  * The components of a system in order of an importance measure, most important first.
  *
  * <p>Values that agree to twelve digits are tied: they share a rank, and stand in order of the
- * system's components.
+ * system's components. A value may be infinite where the measure says so, and is never NaN.
+ *
+ * <p>Measures that add up, such as those that split a derivative or a probability among the
+ * components, also have a total, and each component its share of it. For others, whose sum means
+ * nothing, both are empty.
  *
  * <p>Immutable; safe to share between threads. Equal when measure and entries are equal.
  *
@@ -53,16 +59,29 @@ public final class Ranking {
   private final String measure;
   private final ImmutableList<Entry> entries;
   private final ImmutableMap<String, Double> byComponent;
+  private final OptionalDouble total;
 
-  private Ranking(String measure, List<Entry> entries) {
+  private Ranking(String measure, List<Entry> entries, OptionalDouble total) {
     this.measure = measure;
+    this.total = total;
     this.entries = ImmutableList.copyOf(entries);
     Map<String, Double> values = new LinkedHashMap<>();
     entries.forEach(entry -> values.put(entry.component, entry.value));
     this.byComponent = ImmutableMap.copyOf(values);
   }
 
+  /** For a measure whose sum means nothing. */
   static Ranking of(String measure, List<String> components, double[] values) {
+    return of(measure, components, values, OptionalDouble.empty());
+  }
+
+  /** For a measure whose values add up to something, and are not negative. */
+  static Ranking ofParts(String measure, List<String> components, double[] values) {
+    return of(measure, components, values, OptionalDouble.of(DoubleStream.of(values).sum()));
+  }
+
+  private static Ranking of(
+      String measure, List<String> components, double[] values, OptionalDouble total) {
     List<Integer> order =
         new ArrayList<>(
             IntStream.range(0, components.size())
@@ -75,7 +94,7 @@ public final class Ranking {
     for (int from = 0; from < order.size(); ) {
       double first = values[order.get(from)];
       int to = from + 1;
-      while (to < order.size() && first - values[order.get(to)] <= TIED * first) {
+      while (to < order.size() && tied(first, values[order.get(to)])) {
         to++;
       }
       for (int index : order.subList(from, to).stream().sorted().toList()) {
@@ -83,7 +102,11 @@ public final class Ranking {
       }
       from = to;
     }
-    return new Ranking(measure, entries);
+    return new Ranking(measure, entries, total);
+  }
+
+  private static boolean tied(double first, double value) {
+    return first == value || (!Double.isInfinite(first) && first - value <= TIED * Math.abs(first));
   }
 
   /**
@@ -115,6 +138,32 @@ public final class Ranking {
               + "; name one of these");
     }
     return value;
+  }
+
+  /**
+   * Returns the sum of all values, of a measure that adds up.
+   *
+   * @return the sum; empty where it would mean nothing
+   */
+  public OptionalDouble total() {
+    return total;
+  }
+
+  /**
+   * Returns one component's share of the total, of a measure that adds up.
+   *
+   * @param component its name
+   * @return from 0 to 1, and 0 if the total is 0; empty where a sum would mean nothing
+   * @throws IllegalArgumentException if the system has no such component
+   */
+  public OptionalDouble share(String component) {
+    double value = value(component);
+    return total.isPresent() ? OptionalDouble.of(part(value)) : total;
+  }
+
+  private double part(double value) {
+    double all = total.orElse(0);
+    return all == 0 ? 0 : Math.min(1, value / all);
   }
 
   /** The first few components, quoted, and how many more there are. */
@@ -173,24 +222,24 @@ public final class Ranking {
   /**
    * The ranking as an aligned table.
    *
-   * @return a heading and one line a component: rank, component, value
+   * @return a heading and one line a component: rank, component, value, and its share in percent
+   *     where the measure adds up
    */
   @Override
   public String toString() {
-    int width = "component".length();
+    int width = Math.max("component".length(), Names.width(byComponent.keySet()));
+    boolean shares = total.isPresent();
+    StringBuilder table = new StringBuilder("rank  ");
+    table.append(Names.padded("component", width)).append("  ").append(measure);
+    table.append(shares ? "   share" : "");
     for (Entry entry : entries) {
-      width = Math.max(width, entry.component.codePointCount(0, entry.component.length()));
-    }
-    StringBuilder table = new StringBuilder();
-    table.append(String.format(Locale.ROOT, "rank  %-" + width + "s  %s", "component", measure));
-    for (Entry entry : entries) {
-      table.append(
-          String.format(
-              Locale.ROOT,
-              "%n%4d  %-" + width + "s  %.6e",
-              entry.rank,
-              entry.component,
-              entry.value));
+      String value = String.format(Locale.ROOT, "%.6e", entry.value);
+      table.append(String.format(Locale.ROOT, "%n%4d  ", entry.rank));
+      table.append(Names.padded(entry.component, width)).append("  ");
+      table.append(shares ? Names.padded(value, measure.length()) : value);
+      if (shares) {
+        table.append(String.format(Locale.ROOT, "  %5.1f%%", 100 * part(entry.value)));
+      }
     }
     return table.toString();
   }

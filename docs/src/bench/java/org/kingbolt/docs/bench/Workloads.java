@@ -17,7 +17,8 @@ final class Workloads {
             ScanRows.rows(),
             PolynomialRows.rows(),
             IntervalRows.rows(),
-            SetRows.rows())
+            SetRows.rows(),
+            ImportanceRows.rows())
         .flatMap(List::stream)
         .toList();
   }

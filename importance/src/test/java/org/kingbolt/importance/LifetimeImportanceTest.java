@@ -1,0 +1,173 @@
+package org.kingbolt.importance;
+
+import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertThrows;
+import static org.junit.jupiter.api.Assertions.assertTrue;
+
+import java.util.LinkedHashMap;
+import java.util.List;
+import java.util.Map;
+import java.util.Random;
+import net.jqwik.api.Arbitrary;
+import net.jqwik.api.ForAll;
+import net.jqwik.api.Property;
+import net.jqwik.api.Provide;
+import org.apache.commons.math3.distribution.ExponentialDistribution;
+import org.apache.commons.math3.distribution.NormalDistribution;
+import org.apache.commons.math3.distribution.RealDistribution;
+import org.apache.commons.math3.distribution.UniformRealDistribution;
+import org.apache.commons.math3.distribution.WeibullDistribution;
+import org.apache.commons.math3.fraction.BigFraction;
+import org.junit.jupiter.api.Test;
+import org.kingbolt.core.Structure;
+import org.kingbolt.core.testing.Oracle;
+import org.kingbolt.core.testing.RandomStructures;
+import org.kingbolt.core.testing.RandomStructures.Sample;
+
+/** Barlow-Proschan and Natvig importance. */
+class LifetimeImportanceTest {
+
+  @Provide
+  Arbitrary<Sample> structures() {
+    return RandomStructures.any();
+  }
+
+  /** The signature's form: the orders of failure in which each component is decisive. */
+  @Property(tries = 300)
+  void alikeLifetimes_countTheOrdersOfFailure(@ForAll("structures") Sample sample) {
+    Oracle oracle = sample.oracle();
+    int n = oracle.names().size();
+    if (n > 6) {
+      return;
+    }
+    long[] decisive = new long[n];
+    permute(oracle, (1 << n) - 1, decisive, 1);
+    long orders = 0;
+    for (long count : decisive) {
+      orders += count;
+    }
+    Map<String, BigFraction> exact = Importance.of(sample.structure()).barlowProschanFractions();
+    Ranking rounded = Importance.of(sample.structure()).barlowProschan();
+    BigFraction sum = BigFraction.ZERO;
+    for (int i = 0; i < n; i++) {
+      String name = oracle.names().get(i);
+      assertEquals(new BigFraction(decisive[i]).divide(new BigFraction(orders)), exact.get(name));
+      assertEquals(exact.get(name).doubleValue(), rounded.value(name), 1e-14);
+      sum = sum.add(exact.get(name));
+    }
+    assertEquals(BigFraction.ONE, sum);
+  }
+
+  /** Depth is the number of components; counts the orders of what is left in one step. */
+  private static void permute(Oracle oracle, int working, long[] decisive, long ways) {
+    for (int i = 0; i < decisive.length; i++) {
+      int rest = working & ~(1 << i);
+      if (rest == working) {
+        continue;
+      }
+      if (oracle.table().works(rest)) {
+        permute(oracle, rest, decisive, ways);
+      } else {
+        long orders = ways;
+        for (int k = 2; k <= Integer.bitCount(rest); k++) {
+          orders *= k;
+        }
+        decisive[i] += orders;
+      }
+    }
+  }
+
+  /** Any lifetimes, as long as they are the same ones. */
+  @Property(tries = 30)
+  void equalLifetimes_areAlike(@ForAll("structures") Sample sample) {
+    Ranking alike = Importance.of(sample.structure()).barlowProschan();
+    for (RealDistribution lifetime :
+        List.of(
+            new ExponentialDistribution(1e6),
+            new WeibullDistribution(0.5, 3),
+            new UniformRealDistribution(2, 5))) {
+      Map<String, RealDistribution> lifetimes = new LinkedHashMap<>();
+      sample.structure().components().forEach(name -> lifetimes.put(name, lifetime));
+      Ranking ranking = Importance.of(sample.structure()).barlowProschan(lifetimes);
+      alike.asMap().forEach((name, value) -> assertEquals(value, ranking.value(name), 1e-10));
+      assertEquals(1, ranking.total().orElseThrow(), 1e-10);
+    }
+  }
+
+  /**
+   * Exponential lifetimes: the course of failures is a chain, whose jumps are in proportion to the
+   * rates of what still works.
+   */
+  @Property(tries = 200)
+  void exponentialLifetimes_followTheChainOfFailures(
+      @ForAll("structures") Sample sample, @ForAll Random random) {
+    Oracle oracle = sample.oracle();
+    int n = oracle.names().size();
+    double[] rate = new double[n];
+    Map<String, RealDistribution> lifetimes = new LinkedHashMap<>();
+    for (int i = 0; i < n; i++) {
+      rate[i] = Math.pow(10, 6 * random.nextDouble() - 3);
+      lifetimes.put(oracle.names().get(i), new ExponentialDistribution(1 / rate[i]));
+    }
+    double[] here = new double[1 << n];
+    double[] decisive = new double[n];
+    here[here.length - 1] = 1;
+    for (int state = here.length - 1; state > 0; state--) {
+      double sum = 0;
+      for (int i = 0; i < n; i++) {
+        sum += (state >>> i & 1) != 0 ? rate[i] : 0;
+      }
+      for (int i = 0; i < n && oracle.table().works(state); i++) {
+        int next = state & ~(1 << i);
+        if (next != state) {
+          here[next] += here[state] * rate[i] / sum;
+          decisive[i] += oracle.table().works(next) ? 0 : here[state] * rate[i] / sum;
+        }
+      }
+    }
+    Ranking ranking = Importance.of(sample.structure()).barlowProschan(lifetimes);
+    for (int i = 0; i < n; i++) {
+      assertEquals(decisive[i], ranking.value(oracle.names().get(i)), 1e-9);
+    }
+  }
+
+  /**
+   * Natvig's for exponential lifetimes with rates L1, L2: in series the gain of component i is the
+   * integral of L_i t exp(-(L1+L2)t), so that the shares are as the rates; in parallel it is 1/L_i
+   * - L_i/(L1+L2)^2. By hand.
+   */
+  @Test
+  void natvig_ofTwoComponentsIsThatByHand() {
+    Map<String, RealDistribution> lifetimes =
+        Map.of("a", new ExponentialDistribution(1 / 3.0), "b", new ExponentialDistribution(1));
+    Ranking series = Importance.of(Structure.series("a", "b")).natvig(lifetimes);
+    assertEquals(0.75, series.value("a"), 1e-10);
+    Ranking parallel = Importance.of(Structure.parallel("a", "b")).natvig(lifetimes);
+    double a = 1 / 3.0 - 3 / 16.0;
+    double b = 1 - 1 / 16.0;
+    assertEquals(a / (a + b), parallel.value("a"), 1e-10);
+    assertEquals(1, parallel.total().orElseThrow(), 1e-14);
+  }
+
+  @Test
+  void badLifetimes_areNamed() {
+    Importance pair = Importance.of(Structure.parallel("a", "b"));
+    RealDistribution usual = new ExponentialDistribution(2);
+    assertMessage(
+        "no lifetime for \"b\"; give a distribution for each component",
+        () -> pair.barlowProschan(Map.of("a", usual)));
+    assertMessage(
+        "component \"b\" has failed by time 0 with probability 0.5; a lifetime must be above 0",
+        () -> pair.natvig(Map.of("a", usual, "b", new NormalDistribution(0, 1))));
+    RealDistribution endless = new org.apache.commons.math3.distribution.ParetoDistribution(1, 0.2);
+    IllegalArgumentException bad =
+        assertThrows(
+            IllegalArgumentException.class, () -> pair.natvig(Map.of("a", endless, "b", endless)));
+    assertTrue(bad.getMessage().contains("finite"), bad.getMessage());
+  }
+
+  private static void assertMessage(
+      String message, org.junit.jupiter.api.function.Executable call) {
+    assertEquals(message, assertThrows(IllegalArgumentException.class, call).getMessage());
+  }
+}
