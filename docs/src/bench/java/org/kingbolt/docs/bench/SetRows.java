@@ -45,17 +45,19 @@ final class SetRows {
     private final String file;
     private final int size;
     private final boolean compiles;
-    private final String[] buses;
+    private final String from;
+    private final String to;
 
-    Far(String file, int size, boolean compiles, String... buses) {
+    Far(String file, int size, boolean compiles, String from, String to) {
       this.file = file;
       this.size = size;
       this.compiles = compiles;
-      this.buses = buses;
+      this.from = from;
+      this.to = to;
     }
 
     Structure structure() {
-      return Topology.file(file).connecting(buses);
+      return Topology.file(file).connecting(from, to);
     }
   }
 
