@@ -28,6 +28,9 @@ final class Conjunctions {
   /** So many parts of a gate are taken apart at most. */
   private static final int MOST_PARTS = 12;
 
+  private static final long FEWEST_TERMS = 4;
+  private static final long MOST_TERMS = 1024;
+
   /**
    * One of them.
    *
@@ -59,13 +62,12 @@ final class Conjunctions {
       Composer composer,
       boolean dual,
       long effort,
-      int mostTerms,
       Map<Integer, Optional<Piece>> built,
       WorkMeter meter) {
     this.composer = composer;
     this.dual = dual;
     this.effort = effort;
-    this.mostTerms = mostTerms;
+    this.mostTerms = (int) Math.max(FEWEST_TERMS, Math.min(MOST_TERMS, effort >> 8));
     this.built = built;
     this.meter = meter;
   }
@@ -79,7 +81,8 @@ final class Conjunctions {
     return built.get(expression).orElseThrow();
   }
 
-  private boolean isBuilt(int expression) {
+  /** Whether an operator is small enough to be built, which is tried once. */
+  boolean isBuilt(int expression) {
     Optional<Piece> known = built.get(expression);
     if (known == null) {
       try {
@@ -177,9 +180,28 @@ final class Conjunctions {
     return NEVER;
   }
 
-  private boolean isAll(int expression) {
+  /** Whether an operator works while all of its parts do. */
+  boolean isAll(int expression) {
     return composer.operatorOf(expression) instanceof Threshold
         && needed(expression) == composer.slots(expression);
+  }
+
+  /** The parts of a conjunction of any depth, or else the expression itself. */
+  int[] parts(int expression) {
+    IntSet seen = new IntSet();
+    IntSet parts = new IntSet();
+    seen.add(expression);
+    for (int next = 0; next < seen.size(); next++) {
+      int at = seen.get(next);
+      if (composer.isLeaf(at) || !isAll(at)) {
+        parts.add(at);
+        continue;
+      }
+      for (int level = composer.levels(at) - 1; level >= 0; level--) {
+        seen.add(composer.partAt(at, level));
+      }
+    }
+    return parts.sorted();
   }
 
   /** How many parts of a gate must work, in the dual if that is meant. */
@@ -246,7 +268,12 @@ final class Conjunctions {
 
   /** The parts along the shortest way to where the operator works; of a gate, its first ones. */
   private int[] path(int operator) {
-    Diagram template = composer.operatorOf(operator).template(meter);
+    Diagram template;
+    try {
+      template = composer.operatorOf(operator).template(new Cap(meter, effort));
+    } catch (Cap.Reached reached) {
+      return new int[] {NEVER};
+    }
     int outcome = dual ? Diagram.FAILS : Diagram.WORKS;
     Map<Integer, Integer> cost = new HashMap<>();
     cost.put(outcome, 0);

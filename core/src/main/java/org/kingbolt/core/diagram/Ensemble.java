@@ -21,7 +21,7 @@ final class Ensemble {
   private final double[] up;
   private final double[] down;
   private final WorkMeter meter;
-  private final long held;
+  private long held;
 
   /** How many nodes have been evaluated; a measure of time that is the same every time. */
   private long work;
@@ -71,6 +71,18 @@ final class Ensemble {
 
   int size() {
     return pieces.length;
+  }
+
+  /** Counts what else is kept, in nodes. */
+  void keep(long nodes) {
+    held += nodes;
+    meter.at(held);
+  }
+
+  /** Counts other work in nodes. */
+  void spend(long nodes) {
+    meter.at(held);
+    work += nodes;
   }
 
   /** How many nodes have been evaluated so far. */

@@ -1,14 +1,17 @@
 package org.kingbolt.core.diagram;
 
 import java.util.ArrayList;
+import java.util.Arrays;
 import java.util.HashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Optional;
 
 /**
- * Bounds for a knot whose diagram is too large: the expression is taken apart into {@link
- * Conjunctions} of pieces, and each of these is bounded by {@link Chain}; likewise its dual.
+ * Bounds for a knot whose diagram is too large: the expression is a function of pieces that are
+ * small enough to be built. It is bounded by {@link FirstFailures}, and as a sum of {@link
+ * Conjunctions}, each of which is bounded by {@link Chain}; where both leave much open, so is its
+ * dual. All of these are right, so that the closest ends count.
  */
 final class KnotBounds {
 
@@ -18,8 +21,19 @@ final class KnotBounds {
   /** Ends closer than that, relative to the smaller side, are not brought closer still. */
   private static final double CLOSE = 1e-6;
 
+  /** Ends farther apart than that are worth approximations. */
+  private static final double FAR = 0.1;
+
   /** So many nodes may be evaluated for each node that a diagram may have. */
   private static final long EVALUATIONS = 10_000;
+
+  /** So many beginnings of paths may be kept for each node that a diagram may have. */
+  private static final long PATHS = 48;
+
+  private static final long MOST_EFFORT = 1L << 40;
+  private static final long MOST_PATHS = 1L << 30;
+
+  private static final Bracket UNKNOWN = new Bracket(0, 1, 1, 0);
 
   private final Composer composer;
   private final int root;
@@ -30,35 +44,89 @@ final class KnotBounds {
   KnotBounds(Composer composer, int root, long effort, WorkMeter meter) {
     this.composer = composer;
     this.root = root;
-    this.effort = effort;
+    this.effort = Math.min(MOST_EFFORT, effort);
     this.meter = meter;
   }
 
   /** Bounds the probability of the knot. */
   Bracket at(double[] up, double[] down) {
-    Bracket bracket = one(false, up, down);
-    return isClose(bracket) ? bracket : bracket.and(one(true, down, up).dual());
+    Bracket bracket = side(false, up, down);
+    return isWithin(FAR, bracket) ? bracket : bracket.and(side(true, down, up).dual());
   }
 
-  private static boolean isClose(Bracket bracket) {
-    return bracket.failsAtMost() - bracket.failsAtLeast() <= CLOSE * bracket.failsAtLeast()
-        && bracket.worksAtMost() - bracket.worksAtLeast() <= CLOSE * bracket.worksAtLeast();
+  private static boolean isWithin(double gap, Bracket bracket) {
+    return bracket.failsAtMost() - bracket.failsAtLeast() <= gap * bracket.failsAtLeast()
+        && bracket.worksAtMost() - bracket.worksAtLeast() <= gap * bracket.worksAtLeast();
   }
 
-  private Bracket one(boolean dual, double[] up, double[] down) {
-    int mostTerms = (int) Math.max(4, Math.min(1024, effort >> 8));
-    Conjunctions lower = new Conjunctions(composer, dual, effort, mostTerms, built, meter);
-    Bracket bracket = sum(lower, lower.of(root, true), dual, up, down);
-    if (lower.isComplete()) {
+  /** Bounds for the expression or its dual, at the variables of the same. */
+  private Bracket side(boolean dual, double[] up, double[] down) {
+    Bracket bracket = paths(dual, up, down);
+    if (isWithin(CLOSE, bracket)) {
       return bracket;
     }
-    Conjunctions upper = new Conjunctions(composer, dual, effort, mostTerms, built, meter);
+    Conjunctions lower = conjunctions(dual);
+    List<Conjunctions.Term> terms = lower.of(root, true);
+    if (lower.isComplete()) {
+      return bracket.and(sum(lower, terms, dual, up, down));
+    }
+    if (isWithin(FAR, bracket)) {
+      return bracket;
+    }
+    Conjunctions upper = conjunctions(dual);
+    Bracket below = sum(lower, terms, dual, up, down);
     Bracket above = sum(upper, upper.of(root, false), dual, up, down);
-    return new Bracket(
-        bracket.worksAtLeast(),
-        bracket.failsAtMost(),
-        above.worksAtMost(),
-        above.failsAtLeast());
+    return bracket.and(
+        new Bracket(
+            below.worksAtLeast(), below.failsAtMost(), above.worksAtMost(), above.failsAtLeast()));
+  }
+
+  private Conjunctions conjunctions(boolean dual) {
+    return new Conjunctions(composer, dual, effort, built, meter);
+  }
+
+  /** By ways to fail. */
+  private Bracket paths(boolean dual, double[] up, double[] down) {
+    Conjunctions conjunctions = conjunctions(dual);
+    PieceFunction function =
+        new PieceFunction(
+            composer,
+            root,
+            expression -> !conjunctions.isAll(expression) && conjunctions.isBuilt(expression));
+    double[] ones = new double[function.pieces.length];
+    Arrays.fill(ones, 1);
+    Piece[] pieces = new Piece[ones.length];
+    Diagram diagram;
+    try {
+      Cap cap = new Cap(meter, effort);
+      diagram = OrderSearch.smallest(function.composer, function.root, ones, cap);
+      for (int i = 0; i < pieces.length; i++) {
+        int expression = function.pieces[i];
+        Piece piece =
+            composer.isLeaf(expression)
+                ? Piece.of(composer, expression, cap)
+                : conjunctions.piece(expression);
+        pieces[i] = dual ? piece.dual() : piece;
+      }
+    } catch (Cap.Reached reached) {
+      return UNKNOWN;
+    }
+    Singles singles = new Singles(conjunctions.parts(root), up, down);
+    FirstFailures failures =
+        FirstFailures.of(
+            dual ? Templates.dual(diagram) : diagram,
+            new Ensemble(pieces, singles.up, singles.down, meter),
+            (int) Math.min(MOST_PATHS, PATHS * effort),
+            EVALUATIONS * effort,
+            meter);
+    double most = Math.min(1, failures.failsAtMost);
+    double least = Math.min(1, failures.failsAtLeast);
+    return singles.with(
+        new Bracket(
+            Math.max(0, 1 - most * (1 + ROUNDING)),
+            most,
+            Math.min(1, 1 - least * (1 - ROUNDING)),
+            least));
   }
 
   /** The signed sum, each term at the end that counts. */
@@ -68,13 +136,16 @@ final class KnotBounds {
       boolean dual,
       double[] up,
       double[] down) {
+    if (terms.isEmpty()) {
+      return Bracket.exact(0, 1);
+    }
     double worksAtLeast = 0;
     double failsAtMost = 0;
     double worksAtMost = 0;
     double failsAtLeast = 0;
     double worksTerms = 0;
     double failsTerms = 0;
-    long allowance = EVALUATIONS * effort / Math.max(1, terms.size());
+    long allowance = EVALUATIONS * effort / terms.size();
     for (Conjunctions.Term term : terms) {
       Bracket bracket = conjunction(conjunctions, term.factors(), dual, up, down, allowance);
       double c = term.coefficient();
@@ -85,9 +156,7 @@ final class KnotBounds {
       worksTerms += Math.abs(c) * bracket.worksAtMost();
       failsTerms += Math.abs(c) * bracket.failsAtMost();
     }
-    if (terms.isEmpty()) {
-      return Bracket.exact(0, 1);
-    }
+    // differences may cancel: what rounding has added to them counts on the safe side
     double worksSlack = terms.size() == 1 ? 0 : ROUNDING * worksTerms;
     double failsSlack = terms.size() == 1 ? 0 : ROUNDING * failsTerms;
     return new Bracket(
@@ -98,31 +167,56 @@ final class KnotBounds {
   }
 
   private Bracket conjunction(
-      Conjunctions conjunctions, int[] factors, boolean dual, double[] up, double[] down, long allowance) {
-    double[] restUp = up.clone();
-    double[] restDown = down.clone();
-    double works = 1;
-    double fails = 0;
+      Conjunctions conjunctions,
+      int[] factors,
+      boolean dual,
+      double[] up,
+      double[] down,
+      long allowance) {
+    Singles singles = new Singles(factors, up, down);
     List<Piece> pieces = new ArrayList<>();
     for (int factor : factors) {
-      if (composer.isLeaf(factor)) {
-        // all that counts is what happens while it works
-        int variable = composer.variableOf(factor);
-        fails += works * down[variable];
-        works *= up[variable];
-        restUp[variable] = 1;
-        restDown[variable] = 0;
-      } else {
+      if (!composer.isLeaf(factor)) {
         Piece piece = conjunctions.piece(factor);
         pieces.add(dual ? piece.dual() : piece);
       }
     }
-    Ensemble ensemble = new Ensemble(pieces.toArray(new Piece[0]), restUp, restDown, meter);
-    Bracket rest = Chain.of(ensemble, allowance);
-    return new Bracket(
-        works * rest.worksAtLeast(),
-        fails + works * rest.failsAtMost(),
-        works * rest.worksAtMost(),
-        fails + works * rest.failsAtLeast());
+    Piece[] all = pieces.toArray(new Piece[0]);
+    return singles.with(Chain.of(new Ensemble(all, singles.up, singles.down, meter), allowance));
+  }
+
+  /** The leaves of a conjunction: all that counts besides is what happens while they work. */
+  private final class Singles {
+
+    /** Both vectors, given that the leaves work. */
+    final double[] up;
+
+    final double[] down;
+
+    private double works = 1;
+    private double fails;
+
+    Singles(int[] factors, double[] up, double[] down) {
+      this.up = up.clone();
+      this.down = down.clone();
+      for (int factor : factors) {
+        if (composer.isLeaf(factor)) {
+          int variable = composer.variableOf(factor);
+          fails += works * down[variable];
+          works *= up[variable];
+          this.up[variable] = 1;
+          this.down[variable] = 0;
+        }
+      }
+    }
+
+    /** The whole conjunction, the rest being known while the leaves work. */
+    Bracket with(Bracket rest) {
+      return new Bracket(
+          works * rest.worksAtLeast(),
+          fails + works * rest.failsAtMost(),
+          works * rest.worksAtMost(),
+          fails + works * rest.failsAtLeast());
+    }
   }
 }

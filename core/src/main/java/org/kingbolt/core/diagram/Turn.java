@@ -1,8 +1,10 @@
 package org.kingbolt.core.diagram;
 
+import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.Comparator;
 import java.util.HashMap;
+import java.util.List;
 import java.util.Map;
 import java.util.PriorityQueue;
 
@@ -50,8 +52,11 @@ final class Turn {
   private final int[][][] meetsOver;
   private final long[][] meetsBits;
 
-  private final Map<Long, double[]>[] alone;
-  private final Map<Long, Double>[] both;
+  /** By near piece, and by state of what it shares: the probability that it works. */
+  private final List<Map<Long, Double>> alone = new ArrayList<>();
+
+  /** By near piece, and by the piece met and the state: the probability that both fail. */
+  private final List<Map<Long, Double>> both = new ArrayList<>();
 
   double failsAtLeast;
   double failsAtMost;
@@ -74,8 +79,10 @@ final class Turn {
     this.meets = new int[near.length][];
     this.meetsOver = new int[near.length][][];
     this.meetsBits = new long[near.length][];
-    this.alone = maps(near.length);
-    this.both = maps(near.length);
+    for (int i = 0; i < near.length; i++) {
+      alone.add(new HashMap<>());
+      both.add(new HashMap<>());
+    }
     double fails = pieces.at(piece).fails();
     double works = pieces.at(piece).works();
     if (near.length == 0) {
@@ -98,13 +105,6 @@ final class Turn {
 
   private boolean isOver() {
     return pieces.work() > end;
-  }
-
-  @SuppressWarnings("unchecked")
-  private static <T> Map<Long, T>[] maps(int count) {
-    Map<Long, T>[] maps = new Map[count];
-    Arrays.setAll(maps, i -> new HashMap<Long, T>());
-    return maps;
   }
 
   private int[] shared() {
@@ -269,16 +269,16 @@ final class Turn {
 
   /** The probability that a near piece works, all shared variables being held. */
   private double alone(int i, long failed, boolean rest) {
-    // one key for both: they differ only where variables are beyond the bits
+    // the two differ where variables are beyond the bits
     long key = (failed & bitsOf[i]) | (rest ? 1L << MOST_BITS : 0);
-    double[] known = alone[i].get(key);
+    Double known = alone.get(i).get(key);
     if (known == null) {
       holdAll(failed, rest);
-      known = new double[] {pieces.at(near[i]).works()};
+      known = pieces.at(near[i]).works();
       release();
-      alone[i].put(key, known);
+      alone.get(i).put(key, known);
     }
-    return known[0];
+    return known;
   }
 
   /** Sum over what a near piece meets of the probability that both have failed. */
@@ -289,15 +289,14 @@ final class Turn {
         return 1;
       }
       long key = failed & meetsBits[i][k] | (long) k << MOST_BITS;
-      Double known = both[i].get(key);
-      sum += known == null ? 0 : known;
+      Double known = both.get(i).get(key);
       if (known == null) {
         holdAll(failed, true);
-        double fail = pieces.bothFail(near[i], meets[i][k], meetsOver[i][k]);
+        known = pieces.bothFail(near[i], meets[i][k], meetsOver[i][k]);
         release();
-        both[i].put(key, fail);
-        sum += fail;
+        both.get(i).put(key, known);
       }
+      sum += known;
     }
     return sum;
   }
