@@ -6,6 +6,7 @@ import java.util.List;
 import java.util.Map;
 import java.util.Set;
 import java.util.function.Supplier;
+import org.kingbolt.core.diagram.Bracket;
 import org.kingbolt.core.diagram.Composer;
 import org.kingbolt.core.diagram.Diagram;
 import org.kingbolt.core.diagram.FrontierTooWideException;
@@ -35,6 +36,20 @@ final class Compilation {
     p.fill(components, working, failing);
     double[] both = within(() -> expression(numbering, meter).expect(working, failing, meter));
     return Probability.computed(both[0], both[1]);
+  }
+
+  /**
+   * Both ends of the probability, exact where parts that share components are small enough.
+   *
+   * @param effort how many nodes one diagram may have, at least 1
+   */
+  static Bracket bracket(Structure structure, Probabilities p, long effort, WorkMeter meter) {
+    Numbering numbering = new Numbering(structure, meter);
+    List<String> components = numbering.components();
+    double[] working = new double[components.size()];
+    double[] failing = new double[components.size()];
+    p.fill(components, working, failing);
+    return within(() -> expression(numbering, meter).bracket(working, failing, effort, meter));
   }
 
   static int widestFrontier(Structure structure) {
@@ -106,6 +121,10 @@ final class Compilation {
 
     double[] expect(double[] working, double[] failing, WorkMeter meter) {
       return composer.expect(root, working, failing, meter);
+    }
+
+    Bracket bracket(double[] working, double[] failing, long effort, WorkMeter meter) {
+      return composer.bracket(root, working, failing, effort, meter);
     }
   }
 

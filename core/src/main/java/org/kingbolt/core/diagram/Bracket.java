@@ -1,8 +1,8 @@
 package org.kingbolt.core.diagram;
 
 /**
- * Both ends of a probability, with both sides each: two pairs that differ, or are the same where the
- * probability is known.
+ * Both ends of a probability, with both sides each: two pairs that differ, or are the same where
+ * the probability is known.
  *
  * @param worksAtLeast the lower end of the probability of working
  * @param failsAtMost the upper end of the probability of failing

@@ -4,11 +4,11 @@ package org.kingbolt.core.diagram;
  * Bounds on the probability that all of several pieces work, which may share variables anywhere.
  *
  * <p>The pieces have an order. Let A<sub>j</sub> be the failure of piece j, W<sub>j</sub> its
- * complement. Then the probability of working is the product of P(W<sub>j</sub> | W<sub>k</sub>
- * for all k &lt; j), and each factor is bounded as follows. Of the pieces before j, let D be those
- * that share a variable with j, I the rest, S the variables that j shares with D; W<sub>D</sub>
- * means that all of D work. The variables in S are in none of I, and given their state s, piece j
- * is independent of all pieces before it. Hence
+ * complement. Then the probability of working is the product of P(W<sub>j</sub> | W<sub>k</sub> for
+ * all k &lt; j), and each factor is bounded as follows. Of the pieces before j, let D be those that
+ * share a variable with j, I the rest, S the variables that j shares with D; W<sub>D</sub> means
+ * that all of D work. The variables in S are in none of I, and given their state s, piece j is
+ * independent of all pieces before it. Hence
  *
  * <pre>
  *   P(A_j | W_I W_D) = sum over s of P(s) P(A_j | s) P(W_D | s, W_I) / P(W_D | W_I).

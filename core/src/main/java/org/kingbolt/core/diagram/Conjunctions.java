@@ -3,7 +3,7 @@ package org.kingbolt.core.diagram;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.Collection;
-import java.util.HashMap;
+import java.util.Iterator;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -16,9 +16,9 @@ import java.util.Optional;
  *
  * <p>Series gates are taken apart. A gate of which k parts must work, and which is too large to be
  * built, is the sum over the sets S of k parts or more of (-1)<sup>|S|-k</sup> C(|S|-1, k-1) times
- * the conjunction of S. Where that makes too many conjunctions, and for other operators that are too
- * large, something simpler takes the operator's place, on one side: the conjunction of one of its
- * path sets, which works less often, or nothing at all.
+ * the conjunction of S. Where that makes too many conjunctions, and for other operators that are
+ * too large, something simpler takes the operator's place, on one side: the conjunction of one of
+ * its path sets, which works less often, or nothing at all.
  */
 final class Conjunctions {
 
@@ -28,15 +28,31 @@ final class Conjunctions {
   /** So many parts of a gate are taken apart at most. */
   private static final int MOST_PARTS = 12;
 
+  /** So many large operators in one conjunction may be tried once more. */
+  private static final int FEW = 3;
+
   private static final long FEWEST_TERMS = 4;
   private static final long MOST_TERMS = 1024;
 
-  /**
-   * One of them.
-   *
-   * @param factors expressions in increasing order: leaves, and operators that have been built
-   */
-  record Term(double coefficient, int[] factors) {}
+  /** One of them. */
+  static final class Term {
+    private final double coefficient;
+    private final int[] factors;
+
+    Term(double coefficient, int[] factors) {
+      this.coefficient = coefficient;
+      this.factors = factors;
+    }
+
+    double coefficient() {
+      return coefficient;
+    }
+
+    /** Expressions in increasing order: leaves, and operators that have been built. */
+    int[] factors() {
+      return factors;
+    }
+  }
 
   private record Key(List<Integer> factors) {}
 
@@ -78,21 +94,29 @@ final class Conjunctions {
 
   /** The piece of an operator that has been built. */
   Piece piece(int expression) {
-    return built.get(expression).orElseThrow();
+    return trial(expression).orElseThrow();
   }
 
   /** Whether an operator is small enough to be built, which is tried once. */
   boolean isBuilt(int expression) {
+    return trial(expression).isPresent();
+  }
+
+  private Optional<Piece> trial(int expression) {
     Optional<Piece> known = built.get(expression);
     if (known == null) {
-      try {
-        known = Optional.of(Piece.of(composer, expression, new Cap(meter, effort)));
-      } catch (Cap.Reached reached) {
-        known = Optional.empty();
-      }
+      known = build(expression);
       built.put(expression, known);
     }
-    return known.isPresent();
+    return known;
+  }
+
+  private Optional<Piece> build(int expression) {
+    try {
+      return Optional.of(Piece.of(composer, expression, new Cap(meter, effort)));
+    } catch (Cap.Reached reached) {
+      return Optional.empty();
+    }
   }
 
   /**
@@ -115,19 +139,31 @@ final class Conjunctions {
     Map<Key, Term> open = new LinkedHashMap<>();
     put(open, 1, new int[] {root});
     while (!open.isEmpty()) {
-      Key key = open.keySet().iterator().next();
-      Term term = open.remove(key);
+      Iterator<Term> first = open.values().iterator();
+      Term term = first.next();
+      first.remove();
       int large = flatten(term, lower, open, done);
       if (large < 0) {
         continue;
       }
       int[] rest = Arrays.stream(term.factors).filter(factor -> factor != large).toArray();
       if (!takeApart(large, rest, term.coefficient, open, mostTerms - done.size())) {
-        given.add(large);
+        giveUp(large, rest);
         return List.of();
       }
     }
     return merged(done);
+  }
+
+  /** One operator, and all but a few of those that it stands together with. */
+  private void giveUp(int large, int[] rest) {
+    given.add(large);
+    int others = 0;
+    for (int factor : rest) {
+      if (!composer.isLeaf(factor) && !isBuilt(factor) && ++others > FEW) {
+        given.add(factor);
+      }
+    }
   }
 
   /**
@@ -274,31 +310,33 @@ final class Conjunctions {
     } catch (Cap.Reached reached) {
       return new int[] {NEVER};
     }
-    int outcome = dual ? Diagram.FAILS : Diagram.WORKS;
-    Map<Integer, Integer> cost = new HashMap<>();
-    cost.put(outcome, 0);
     int far = template.levels() + 1;
-    for (int id = 2; id < template.size(); id++) {
+    int[] cost = new int[template.size()];
+    cost[dual ? Diagram.WORKS : Diagram.FAILS] = far;
+    for (int id = 2; id < cost.length; id++) {
       meter.at(id);
-      int taken = dual ? template.low(id) : template.high(id);
-      int passed = dual ? template.high(id) : template.low(id);
-      cost.put(
-          id, Math.min(cost.getOrDefault(taken, far) + 1, cost.getOrDefault(passed, far)));
+      cost[id] =
+          Math.min(
+              cost[taken(template, id)] + 1, cost[dual ? template.high(id) : template.low(id)]);
     }
     int id = template.root();
-    if (cost.getOrDefault(id, far) >= far) {
+    if (cost[id] >= far) {
       return new int[] {NEVER};
     }
     IntSet path = new IntSet();
     while (id >= 2) {
-      int taken = dual ? template.low(id) : template.high(id);
       int passed = dual ? template.high(id) : template.low(id);
-      boolean pass = cost.getOrDefault(passed, far) <= cost.get(id);
-      if (!pass) {
+      if (cost[passed] > cost[id]) {
         path.add(composer.partAt(operator, template.levelOf(id)));
+        id = taken(template, id);
+      } else {
+        id = passed;
       }
-      id = pass ? passed : taken;
     }
     return path.toArray();
+  }
+
+  private int taken(Diagram template, int id) {
+    return dual ? template.low(id) : template.high(id);
   }
 }

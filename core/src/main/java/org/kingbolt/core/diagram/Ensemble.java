@@ -1,6 +1,8 @@
 package org.kingbolt.core.diagram;
 
 import java.util.Arrays;
+import java.util.HashMap;
+import java.util.Map;
 
 /**
  * Pieces at one vector of independent variables, some of which may be held failed or working for a
@@ -41,7 +43,7 @@ final class Ensemble {
     this.meter = meter;
     this.open = new int[pieces.length][];
     this.neighbours = new int[pieces.length][];
-    IntSet[] users = new IntSet[up.length];
+    Map<Integer, IntSet> users = new HashMap<>();
     long nodes = 0;
     for (int piece = 0; piece < pieces.length; piece++) {
       nodes += pieces[piece].size();
@@ -49,9 +51,7 @@ final class Ensemble {
           Arrays.stream(pieces[piece].variables()).filter(v -> up[v] > 0 && down[v] > 0).toArray();
       Arrays.sort(open[piece]);
       for (int variable : open[piece]) {
-        IntSet set = users[variable];
-        users[variable] = set == null ? new IntSet() : set;
-        users[variable].add(piece);
+        users.computeIfAbsent(variable, absent -> new IntSet()).add(piece);
       }
     }
     this.held = nodes;
@@ -60,7 +60,7 @@ final class Ensemble {
       found.add(piece);
       for (int variable : open[piece]) {
         meter.at(nodes);
-        for (int user : users[variable].toArray()) {
+        for (int user : users.getOrDefault(variable, new IntSet()).toArray()) {
           found.add(user);
         }
       }

@@ -5,8 +5,8 @@ import java.util.Arrays;
 /**
  * The probability of an expression from below and from above, module by module like {@link
  * Expectation}: knots whose diagrams grow beyond a limit are bounded by {@link KnotBounds},
- * everything else is exact. A module whose parts are only bounded is evaluated at both ends of them,
- * as it is monotone.
+ * everything else is exact. A module whose parts are only bounded is evaluated at both ends of
+ * them, as it is monotone.
  */
 final class ExpectationBounds {
 
@@ -76,8 +76,7 @@ final class ExpectationBounds {
       lower.set(expression);
       upper.set(expression);
     }
-    return new Bracket(
-        lower.works[root], lower.fails[root], upper.works[root], upper.fails[root]);
+    return new Bracket(lower.works[root], lower.fails[root], upper.works[root], upper.fails[root]);
   }
 
   private void untie(int module) {

@@ -9,8 +9,8 @@ import java.util.PriorityQueue;
  * for functions that fail only where several pieces do.
  *
  * <p>The diagram of the function, its variables being the pieces, has disjoint paths to the outcome
- * "fails", one of which is taken. On a path the pieces J have failed and the pieces E work. Let D be
- * those of E that share a variable with some piece of J, I the rest. With the notation and the
+ * "fails", one of which is taken. On a path the pieces J have failed and the pieces E work. Let D
+ * be those of E that share a variable with some piece of J, I the rest. With the notation and the
  * inequalities of {@link Chain}, as J is independent of I,
  *
  * <pre>
@@ -123,8 +123,7 @@ final class FirstFailures {
     int[] levelOf = new int[n];
     for (int level = 0; level < function.levels(); level++) {
       levelOf[function.variableAt(level)] = level;
-      Arrays.fill(
-          pieceOf, function.from(level), function.to(level), function.variableAt(level));
+      Arrays.fill(pieceOf, function.from(level), function.to(level), function.variableAt(level));
     }
     for (int piece = 0; piece < n; piece++) {
       works[piece] = pieces.at(piece).works();

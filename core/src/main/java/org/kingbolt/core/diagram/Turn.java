@@ -197,7 +197,7 @@ final class Turn {
       }
       gap -= branch.gap();
       for (int state = 0; state < 2; state++) {
-        long failed = branch.failed | (long) state << branch.bits;
+        long failed = branch.failed | ((long) state << branch.bits);
         int variable = shared[branch.bits];
         double weight = state == 0 ? pieces.up(variable) : pieces.down(variable);
         double before = weight(failed, branch.bits) * weight;
@@ -205,8 +205,7 @@ final class Turn {
         double oneFails = before * pieces.at(piece).fails();
         double oneWorks = before * pieces.at(piece).works();
         release();
-        Branch part =
-            branch(number++, branch.bits + 1, failed, oneFails, oneWorks, least, most);
+        Branch part = branch(number++, branch.bits + 1, failed, oneFails, oneWorks, least, most);
         gap += part.gap();
         open.add(part);
       }
@@ -288,7 +287,7 @@ final class Turn {
       if (isOver()) {
         return 1;
       }
-      long key = failed & meetsBits[i][k] | (long) k << MOST_BITS;
+      long key = (failed & meetsBits[i][k]) | ((long) k << MOST_BITS);
       Double known = both.get(i).get(key);
       if (known == null) {
         holdAll(failed, true);
