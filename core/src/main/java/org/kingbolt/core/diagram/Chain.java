@@ -25,11 +25,15 @@ package org.kingbolt.core.diagram;
  *                    &gt;= P(A_d) - sum over k in N of P(A_d A_k),
  * </pre>
  *
- * <p>as A<sub>d</sub> is independent of W<sub>M</sub>, and A<sub>d</sub> A<sub>k</sub> is a
- * decreasing event. (The step is the one in Boppana and Spencer's proof of Janson's inequality, for
- * general monotone events as in Riordan &amp; Warnke, Random Struct. Algorithms 46 (2015) 391.) So
- * P(W_D | s, W_I) is at most the product of min(1, P(W_d) + sum of P(A_d A_k)), given s, terms of
- * one sign only. Both bounds also hold without s. Moreover P(A_j | W_I W_D) is at most P(A_j).
+ * <p>where the first probability is even P(A_d W_N | W_M) / P(W_N | W_M), as A<sub>d</sub> is
+ * independent of W<sub>M</sub>, and A<sub>d</sub> A<sub>k</sub> is a decreasing event. (The step is
+ * the one in Boppana and Spencer's proof of Janson's inequality, for general monotone events as in
+ * Riordan &amp; Warnke, Random Struct. Algorithms 46 (2015) 391.) So P(W_D | s, W_I) is at most the
+ * product over d of min(1, P(W_d) + sum of P(A_d A_k)), given s. By the same argument, P(W_N | W_M)
+ * is at most the product over k in N of min(1, P(W_k) + sum of P(A_k A_l)), over all l that share
+ * something with k; this divides the lower bound of P(A_d | W_N W_M), and as it is increasing in s,
+ * it is taken where all of S work. Both bounds also hold without s. Moreover P(A_j | W_I W_D) is at
+ * most P(A_j).
  *
  * <p>The sum over s is cut off, best first: a part of it in which only some variables of S are held
  * has both factors at its ends, as P(W_D | s, W_I) is increasing in s.

@@ -31,6 +31,11 @@ final class Conjunctions {
   /** So many large operators in one conjunction may be tried once more. */
   private static final int FEW = 3;
 
+  private static final int MOST_ATTEMPTS = 16;
+
+  /** What a part that is too large adds to the length of a path; a leaf adds 1. */
+  private static final double FAR = 1e6;
+
   private static final long FEWEST_TERMS = 4;
   private static final long MOST_TERMS = 1024;
 
@@ -125,34 +130,34 @@ final class Conjunctions {
    * @param lower whether to approximate from below, where it must be
    */
   List<Term> of(int root, boolean lower) {
-    while (true) {
-      int before = given.size();
-      List<Term> terms = attempt(root, lower);
-      if (given.size() == before) {
-        return terms;
+    for (int attempt = 0; ; attempt++) {
+      // in the end, nothing that is too large is taken apart
+      List<Term> done = new ArrayList<>();
+      if (attempt(root, lower, attempt < MOST_ATTEMPTS, done)) {
+        return merged(done);
       }
     }
   }
 
-  private List<Term> attempt(int root, boolean lower) {
-    List<Term> done = new ArrayList<>();
+  /** False if some operator has had to be given up after others have been taken apart. */
+  private boolean attempt(int root, boolean lower, boolean apart, List<Term> done) {
     Map<Key, Term> open = new LinkedHashMap<>();
     put(open, 1, new int[] {root});
     while (!open.isEmpty()) {
       Iterator<Term> first = open.values().iterator();
       Term term = first.next();
       first.remove();
-      int large = flatten(term, lower, open, done);
+      int large = flatten(term, lower, apart, open, done);
       if (large < 0) {
         continue;
       }
       int[] rest = Arrays.stream(term.factors).filter(factor -> factor != large).toArray();
       if (!takeApart(large, rest, term.coefficient, open, mostTerms - done.size())) {
         giveUp(large, rest);
-        return List.of();
+        return false;
       }
     }
-    return merged(done);
+    return true;
   }
 
   /** One operator, and all but a few of those that it stands together with. */
@@ -172,7 +177,8 @@ final class Conjunctions {
    * @return an operator that is still too large, for which the term stands; or -1 if the term has
    *     been dealt with
    */
-  private int flatten(Term term, boolean lower, Map<Key, Term> open, List<Term> done) {
+  private int flatten(
+      Term term, boolean lower, boolean apart, Map<Key, Term> open, List<Term> done) {
     IntSet kept = new IntSet();
     IntSet seen = new IntSet();
     for (int factor : term.factors) {
@@ -189,7 +195,7 @@ final class Conjunctions {
         for (int level = composer.levels(factor) - 1; level >= 0; level--) {
           seen.add(composer.partAt(factor, level));
         }
-      } else if (given.contains(factor)) {
+      } else if (given.contains(factor) || (!apart && !isBuilt(factor))) {
         changed = true;
         complete = false;
         for (int part : lower ? path(factor) : new int[0]) {
@@ -302,7 +308,7 @@ final class Conjunctions {
     return merged.values().stream().filter(term -> term.coefficient != 0).toList();
   }
 
-  /** The parts along the shortest way to where the operator works; of a gate, its first ones. */
+  /** The parts along the shortest way to where the operator works; leaves counting least. */
   private int[] path(int operator) {
     Diagram template;
     try {
@@ -310,22 +316,22 @@ final class Conjunctions {
     } catch (Cap.Reached reached) {
       return new int[] {NEVER};
     }
-    int far = template.levels() + 1;
-    int[] cost = new int[template.size()];
-    cost[dual ? Diagram.WORKS : Diagram.FAILS] = far;
-    for (int id = 2; id < cost.length; id++) {
-      meter.at(id);
-      cost[id] =
-          Math.min(
-              cost[taken(template, id)] + 1, cost[dual ? template.high(id) : template.low(id)]);
+    double[] cost = new double[template.size()];
+    cost[dual ? Diagram.WORKS : Diagram.FAILS] = Double.POSITIVE_INFINITY;
+    for (int level = template.levels() - 1; level >= 0; level--) {
+      int part = composer.partAt(operator, level);
+      double one = composer.isLeaf(part) ? 1 : isBuilt(part) ? 2 : FAR;
+      for (int id = template.from(level); id < template.to(level); id++) {
+        cost[id] = Math.min(cost[taken(template, id)] + one, cost[passed(template, id)]);
+      }
     }
     int id = template.root();
-    if (cost[id] >= far) {
+    if (cost[id] == Double.POSITIVE_INFINITY) {
       return new int[] {NEVER};
     }
     IntSet path = new IntSet();
     while (id >= 2) {
-      int passed = dual ? template.high(id) : template.low(id);
+      int passed = passed(template, id);
       if (cost[passed] > cost[id]) {
         path.add(composer.partAt(operator, template.levelOf(id)));
         id = taken(template, id);
@@ -334,6 +340,10 @@ final class Conjunctions {
       }
     }
     return path.toArray();
+  }
+
+  private int passed(Diagram template, int id) {
+    return dual ? template.high(id) : template.low(id);
   }
 
   private int taken(Diagram template, int id) {

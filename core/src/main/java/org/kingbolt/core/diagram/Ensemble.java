@@ -28,6 +28,9 @@ final class Ensemble {
   /** How many nodes have been evaluated; a measure of time that is the same every time. */
   private long work;
 
+  private final Map<Long, Double> pairs = new HashMap<>();
+  private final double[] sums;
+
   /** The variables of each piece that may be in either state, in increasing order. */
   private final int[][] open;
 
@@ -43,6 +46,8 @@ final class Ensemble {
     this.meter = meter;
     this.open = new int[pieces.length][];
     this.neighbours = new int[pieces.length][];
+    this.sums = new double[pieces.length];
+    Arrays.fill(sums, -1);
     Map<Integer, IntSet> users = new HashMap<>();
     long nodes = 0;
     for (int piece = 0; piece < pieces.length; piece++) {
@@ -129,6 +134,30 @@ final class Ensemble {
     return Arrays.stream(open[one])
         .filter(variable -> Arrays.binarySearch(open[other], variable) >= 0)
         .toArray();
+  }
+
+  /** The probability that two pieces have both failed, nothing being held, or a little more. */
+  double bothFail(int one, int other) {
+    long key = (long) Math.min(one, other) * pieces.length + Math.max(one, other);
+    Double known = pairs.get(key);
+    if (known == null) {
+      known = bothFail(one, other, common(one, other));
+      pairs.put(key, known);
+      keep(1);
+    }
+    return known;
+  }
+
+  /** The sum of that over all that a piece shares something with. */
+  double bothFailSum(int piece) {
+    if (sums[piece] < 0) {
+      double sum = 0;
+      for (int other : neighbours[piece]) {
+        sum += bothFail(piece, other);
+      }
+      sums[piece] = sum;
+    }
+    return sums[piece];
   }
 
   /**

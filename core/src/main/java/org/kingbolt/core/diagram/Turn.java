@@ -52,8 +52,11 @@ final class Turn {
   private final int[][][] meetsOver;
   private final long[][] meetsBits;
 
+  /** At most the probability that all of these work. */
+  private final double[] metWork;
+
   /** By near piece, and by state of what it shares: the probability that it works. */
-  private final List<Map<Long, Double>> alone = new ArrayList<>();
+  private final List<Map<Long, double[]>> alone = new ArrayList<>();
 
   /** By near piece, and by the piece met and the state: the probability that both fail. */
   private final List<Map<Long, Double>> both = new ArrayList<>();
@@ -79,6 +82,7 @@ final class Turn {
     this.meets = new int[near.length][];
     this.meetsOver = new int[near.length][][];
     this.meetsBits = new long[near.length][];
+    this.metWork = new double[near.length];
     for (int i = 0; i < near.length; i++) {
       alone.add(new HashMap<>());
       both.add(new HashMap<>());
@@ -97,8 +101,12 @@ final class Turn {
       bitsOf[i] = bitsOf(near[i]);
       meet(i);
       double one = pieces.at(near[i]).works();
+      double fail = pieces.at(near[i]).fails();
       least *= one;
-      most *= Math.min(1, one + bothFailBefore(i));
+      most *= before(i, one, fail);
+    }
+    for (int i = 0; i < near.length; i++) {
+      metWork[i] = allMetWork(i);
     }
     split(fails, works, least, most);
   }
@@ -162,18 +170,20 @@ final class Turn {
     meetsBits[i] = Arrays.stream(meets[i]).mapToLong(k -> bitsOf(k) | bitsOf[i]).toArray();
   }
 
-  /** Sum over the pieces placed before a near one of the probability that both have failed. */
-  private double bothFailBefore(int i) {
-    double sum = 0;
+  /** At most the probability that a near piece works, given that those before it do. */
+  private double before(int i, double works, double fails) {
+    double joint = 0;
+    double allWork = 1;
     for (int other : pieces.neighbours(near[i])) {
       if (isOver()) {
         return 1;
       }
       if (isBefore(other, near[i])) {
-        sum += pieces.bothFail(near[i], other, pieces.common(near[i], other));
+        joint += pieces.bothFail(near[i], other);
+        allWork *= Math.min(1, pieces.at(other).works() + pieces.bothFailSum(other));
       }
     }
-    return sum;
+    return atMost(works, fails, joint, allWork);
   }
 
   private void split(double fails, double works, double least, double most) {
@@ -250,11 +260,12 @@ final class Turn {
     double low = 1;
     long worst = failed | (held < bits ? ((1L << bits) - 1) & -(1L << held) : 0);
     for (int i = 0; i < near.length && low > 0; i++) {
-      low *= alone(i, worst, false);
+      low *= alone(i, worst, false)[0];
     }
     double high = 1;
     for (int i = 0; i < near.length && high > 0; i++) {
-      high *= Math.min(1, alone(i, failed, true) + meeting(i, failed));
+      double[] one = alone(i, failed, true);
+      high *= atMost(one[0], one[1], meeting(i, failed), metWork[i]);
     }
     return new Branch(
         number,
@@ -266,18 +277,41 @@ final class Turn {
         least > 0 ? high / least : Double.MAX_VALUE);
   }
 
-  /** The probability that a near piece works, all shared variables being held. */
-  private double alone(int i, long failed, boolean rest) {
+  /** The probabilities that a near piece works and fails, all shared variables being held. */
+  private double[] alone(int i, long failed, boolean rest) {
     // the two differ where variables are beyond the bits
     long key = (failed & bitsOf[i]) | (rest ? 1L << MOST_BITS : 0);
-    Double known = alone.get(i).get(key);
+    double[] known = alone.get(i).get(key);
     if (known == null) {
       holdAll(failed, rest);
-      known = pieces.at(near[i]).works();
+      Piece held = pieces.at(near[i]);
+      known = new double[] {held.works(), held.fails()};
       release();
       alone.get(i).put(key, known);
     }
     return known;
+  }
+
+  /**
+   * At most the probability that a piece works, given that those do which it meets.
+   *
+   * @param joint sum over these of the probability that both have failed
+   * @param allWork at most the probability that all of these work
+   */
+  private static double atMost(double works, double fails, double joint, double allWork) {
+    double gain = allWork > 0 ? Math.max(0, fails - joint) * ((1 - allWork) / allWork) : 0;
+    return Math.min(1, Math.max(works, works + joint - gain));
+  }
+
+  /** At most the probability that all work which a near piece meets, the shared ones working. */
+  private double allMetWork(int i) {
+    double most = 1;
+    for (int other : meets[i]) {
+      int place = Arrays.binarySearch(near, other);
+      double works = place < 0 ? pieces.at(other).works() : alone(place, 0, true)[0];
+      most *= isOver() ? 1 : Math.min(1, works + pieces.bothFailSum(other));
+    }
+    return most;
   }
 
   /** Sum over what a near piece meets of the probability that both have failed. */
