@@ -6,7 +6,6 @@ import java.util.List;
 import java.util.Map;
 import java.util.Set;
 import java.util.function.Supplier;
-import org.kingbolt.core.diagram.Bracket;
 import org.kingbolt.core.diagram.Composer;
 import org.kingbolt.core.diagram.Diagram;
 import org.kingbolt.core.diagram.FrontierTooWideException;
@@ -42,14 +41,15 @@ final class Compilation {
    * Both ends of the probability, exact where parts that share components are small enough.
    *
    * @param effort how many nodes one diagram may have, at least 1
+   * @return in the order of {@link Composer#expectBetween}
    */
-  static Bracket bracket(Structure structure, Probabilities p, long effort, WorkMeter meter) {
+  static double[] between(Structure structure, Probabilities p, long effort, WorkMeter meter) {
     Numbering numbering = new Numbering(structure, meter);
     List<String> components = numbering.components();
     double[] working = new double[components.size()];
     double[] failing = new double[components.size()];
     p.fill(components, working, failing);
-    return within(() -> expression(numbering, meter).bracket(working, failing, effort, meter));
+    return within(() -> expression(numbering, meter).between(working, failing, effort, meter));
   }
 
   static int widestFrontier(Structure structure) {
@@ -123,8 +123,8 @@ final class Compilation {
       return composer.expect(root, working, failing, meter);
     }
 
-    Bracket bracket(double[] working, double[] failing, long effort, WorkMeter meter) {
-      return composer.bracket(root, working, failing, effort, meter);
+    double[] between(double[] working, double[] failing, long effort, WorkMeter meter) {
+      return composer.expectBetween(root, working, failing, effort, meter);
     }
   }
 

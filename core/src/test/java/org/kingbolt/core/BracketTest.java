@@ -23,13 +23,15 @@ import org.junit.jupiter.api.Test;
 import org.junit.jupiter.params.ParameterizedTest;
 import org.junit.jupiter.params.provider.CsvSource;
 import org.junit.jupiter.params.provider.ValueSource;
-import org.kingbolt.core.diagram.Bracket;
 import org.kingbolt.core.diagram.WorkMeter;
 import org.kingbolt.core.testing.RandomStructures;
 import org.kingbolt.core.testing.RandomStructures.Sample;
 
 /** Both ends of a probability, where diagrams may not be as large as they would have to be. */
 class BracketTest {
+
+  private record Bracket(
+      double worksAtLeast, double failsAtMost, double worksAtMost, double failsAtLeast) {}
 
   /** What rounding may do, relative to an end. */
   private static final double ROUNDING = 1e-12;
@@ -45,7 +47,8 @@ class BracketTest {
   }
 
   private static Bracket bracket(Structure structure, Probabilities p, long effort) {
-    return Compilation.bracket(structure, p, effort, WorkMeter.UNLIMITED);
+    double[] ends = Compilation.between(structure, p, effort, WorkMeter.UNLIMITED);
+    return new Bracket(ends[0], ends[1], ends[2], ends[3]);
   }
 
   private static void assertHolds(Bracket bracket, BigDecimal works, BigDecimal fails) {
@@ -265,7 +268,7 @@ class BracketTest {
     Structure structure = trains(1, 2, subsystems(200, 0.2, 10, 20, 4));
     Probabilities p = between(1e-3, 1e-2, structure, 4);
     long[] calls = {0};
-    Compilation.bracket(structure, p, 300, held -> calls[0]++);
+    Compilation.between(structure, p, 300, held -> calls[0]++);
     long all = calls[0];
     assertTrue(all > 10_000);
     for (int part = 1; part < 10; part++) {
@@ -274,7 +277,7 @@ class BracketTest {
       assertThrows(
           Stopped.class,
           () ->
-              Compilation.bracket(
+              Compilation.between(
                   structure,
                   p,
                   300,

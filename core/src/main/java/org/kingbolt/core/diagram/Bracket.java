@@ -9,8 +9,7 @@ package org.kingbolt.core.diagram;
  * @param worksAtMost the upper end of the probability of working
  * @param failsAtLeast the lower end of the probability of failing
  */
-public record Bracket(
-    double worksAtLeast, double failsAtMost, double worksAtMost, double failsAtLeast) {
+record Bracket(double worksAtLeast, double failsAtMost, double worksAtMost, double failsAtLeast) {
 
   /** A known probability. */
   static Bracket exact(double works, double fails) {

@@ -285,11 +285,15 @@ public final class Composer {
    * @param effort how many nodes may be spent on one diagram, at least 1; the more, the closer, in
    *     general
    * @param meter hears of every node and state
-   * @return both ends; the same for the same effort
+   * @return four numbers, the same for the same effort: at least the probability of working, at
+   *     most that of failing; at most that of working, at least that of failing
    */
-  public Bracket bracket(
+  public double[] expectBetween(
       int root, double[] working, double[] failing, long effort, WorkMeter meter) {
-    return ExpectationBounds.of(this, root, working, failing, effort, meter);
+    Bracket both = ExpectationBounds.of(this, root, working, failing, effort, meter);
+    return new double[] {
+      both.worksAtLeast(), both.failsAtMost(), both.worksAtMost(), both.failsAtLeast()
+    };
   }
 
   /**
