@@ -39,12 +39,28 @@ final class Compilation {
   }
 
   /**
-   * The probability of a structure that works less often, or more often, than this one.
+   * Both ends of the probability, exact where parts that share components are small enough.
    *
-   * @param relaxer chooses for the networks
-   * @param effort how many nodes a diagram may have
+   * @param effort how many nodes one diagram may have, at least 1
+   * @return in the order of {@link Composer#expectBetween}
    */
-  static double[] oneSided(
+  static double[] between(Structure structure, Probabilities p, long effort, WorkMeter meter) {
+    Numbering numbering = new Numbering(structure, meter);
+    List<String> components = numbering.components();
+    double[] working = new double[components.size()];
+    double[] failing = new double[components.size()];
+    p.fill(components, working, failing);
+    return within(() -> expression(numbering, meter).between(working, failing, effort, meter));
+  }
+
+  /**
+   * Both ends of the probability of a structure whose networks are replaced.
+   *
+   * @param relaxer says by what
+   * @param effort how many nodes one diagram may have, at least 1
+   * @return in the order of {@link Composer#expectBetween}
+   */
+  static double[] between(
       Numbering numbering,
       NetworkRelaxer relaxer,
       double[] working,
@@ -53,7 +69,8 @@ final class Compilation {
       WorkMeter meter) {
     Composer composer = new Composer(0);
     composer.relax(relaxer);
-    return within(() -> expression(numbering, composer, meter).expect(working, failing, meter));
+    return within(
+        () -> expression(numbering, composer, meter).between(working, failing, effort, meter));
   }
 
   static int widestFrontier(Structure structure) {
@@ -125,6 +142,10 @@ final class Compilation {
 
     double[] expect(double[] working, double[] failing, WorkMeter meter) {
       return composer.expect(root, working, failing, meter);
+    }
+
+    double[] between(double[] working, double[] failing, long effort, WorkMeter meter) {
+      return composer.expectBetween(root, working, failing, effort, meter);
     }
   }
 

@@ -1,5 +1,6 @@
 package org.kingbolt.core;
 
+import java.util.Arrays;
 import java.util.List;
 import org.kingbolt.core.diagram.NetworkRelaxer;
 import org.kingbolt.core.diagram.WorkMeter;
@@ -25,6 +26,7 @@ import org.kingbolt.core.diagram.WorkMeter;
 public final class Enclosure {
 
   private static final long FIRST_EFFORT = 1 << 17;
+  private static final long FIRST_GATE_EFFORT = 1_000;
   private static final int MORE_EFFORT = 4;
 
   private final Numbering numbering;
@@ -37,7 +39,9 @@ public final class Enclosure {
   private boolean started;
   private boolean exact;
   private boolean ended;
-  private int changes;
+  private long gateEffort;
+  private long evaluatedEffort;
+  private int evaluatedChanges;
   private double[] lower = {0, 1};
   private double[] upper = {1, 0};
 
@@ -50,6 +54,7 @@ public final class Enclosure {
     this.meter = budget.start("narrowing an interval");
     this.mostEffort = Math.max(1, budget.nodes() / 2);
     this.effort = Math.min(effort, mostEffort);
+    this.gateEffort = Math.min(FIRST_GATE_EFFORT, this.effort);
   }
 
   /**
@@ -104,40 +109,47 @@ public final class Enclosure {
   private boolean step() {
     meter.now(0);
     if (!started) {
-      update();
+      // the networks come to be known
+      between(true);
       started = true;
-      return !exact;
     }
-    while (!relaxer.step(effort, meter)) {
-      if (relaxer.isExact() || effort >= mostEffort) {
-        update();
+    while (!relaxer.step(effort, meter) && isEvaluated()) {
+      if (gateEffort == mostEffort && (effort == mostEffort || relaxer.isExact())) {
         return false;
       }
       effort = Math.min(mostEffort, effort * MORE_EFFORT);
+      gateEffort = Math.min(mostEffort, gateEffort * MORE_EFFORT);
     }
     update();
     return !exact;
   }
 
-  private void update() {
-    if (started && relaxer.changes() == changes) {
-      return;
-    }
-    double[] less = side(true);
-    double[] more = side(false);
-    if (isSmaller(lower, less)) {
-      lower = less;
-    }
-    if (isSmaller(more, upper)) {
-      upper = more;
-    }
-    changes = relaxer.changes();
-    exact = relaxer.isExact();
+  private boolean isEvaluated() {
+    return evaluatedEffort == gateEffort && evaluatedChanges == relaxer.changes();
   }
 
-  private double[] side(boolean lessWorking) {
-    return Compilation.oneSided(
-        numbering, relaxer.begin(lessWorking), working, failing, effort, meter);
+  private void update() {
+    if (isEvaluated()) {
+      return;
+    }
+    double[] less = between(true);
+    double[] more = relaxer.isExact() ? less : between(false);
+    double[] below = {less[0], less[1]};
+    double[] above = {more[2], more[3]};
+    exact = relaxer.isExact() && Arrays.equals(below, above);
+    if (exact || isSmaller(lower, below)) {
+      lower = below;
+    }
+    if (exact || isSmaller(above, upper)) {
+      upper = above;
+    }
+    evaluatedEffort = gateEffort;
+    evaluatedChanges = relaxer.changes();
+  }
+
+  private double[] between(boolean lessWorking) {
+    return Compilation.between(
+        numbering, relaxer.begin(lessWorking), working, failing, gateEffort, meter);
   }
 
   /** Whether one probability is smaller than another, judged on the side that has more digits. */

@@ -289,6 +289,28 @@ public final class Composer {
   }
 
   /**
+   * Both ends of the probability that an expression works, and of that it fails: the same where
+   * parts that share something are small enough to be built, and bounds elsewhere. They hold up to
+   * rounding, which is not directed: to about {@code 4 levels 2^-53} of each, like {@link #expect}.
+   *
+   * @param root the expression
+   * @param working indexed by variable: probability of working, variables being independent
+   * @param failing indexed by variable: the complement
+   * @param effort how many nodes may be spent on one diagram, at least 1; the more, the closer, in
+   *     general
+   * @param meter hears of every node and state
+   * @return four numbers, the same for the same effort: at least the probability of working, at
+   *     most that of failing; at most that of working, at least that of failing
+   */
+  public double[] expectBetween(
+      int root, double[] working, double[] failing, long effort, WorkMeter meter) {
+    Bracket both = ExpectationBounds.of(this, root, working, failing, effort, meter);
+    return new double[] {
+      both.worksAtLeast(), both.failsAtMost(), both.worksAtMost(), both.failsAtLeast()
+    };
+  }
+
+  /**
    * Builds the diagram of an expression, in the caller's order. The expression is used up.
    *
    * @param root the expression

@@ -29,11 +29,11 @@ final class ExcerptValue {
     Composer composer = new Composer(works.length);
     int[] slots = new int[works.length];
     Arrays.setAll(slots, composer::variable);
-    CappedMeter capped = new CappedMeter(most, meter);
+    Cap capped = new Cap(meter, most);
     Diagram diagram;
     try {
       diagram = composer.compose(composer.network(excerpt, false, slots, capped), capped);
-    } catch (CappedMeter.CapMetException | FrontierTooWideException tooLarge) {
+    } catch (Cap.Reached | FrontierTooWideException tooLarge) {
       return null;
     }
     Scan scan = new Scan(diagram, works.length);

@@ -127,10 +127,10 @@ final class NetworkEnclosure {
     if (Math.pow(GROWTH, known.width()) <= MARGIN * most) {
       double[] both = new double[2];
       try {
-        StateSweep.expect(known.rule(), works, fails, both, new CappedMeter(most, meter));
+        StateSweep.expect(known.rule(), works, fails, both, new Cap(meter, most));
         improve(Means.WHOLE, both[1], both[1]);
         return;
-      } catch (CappedMeter.CapMetException tooLarge) {
+      } catch (Cap.Reached tooLarge) {
         // the likeliest states will do
       }
     }

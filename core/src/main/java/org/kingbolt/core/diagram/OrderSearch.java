@@ -45,9 +45,9 @@ final class OrderSearch {
   /** How large a table may become. */
   private long limit = FIRST_LIMIT;
 
-  private OrderSearch(Knot knot, double[] sizes, WorkMeter meter) {
-    this.composer = knot.composer;
-    this.root = knot.root;
+  private OrderSearch(Composer composer, int root, double[] sizes, WorkMeter meter) {
+    this.composer = composer;
+    this.root = root;
     this.sizes = sizes;
     this.meter = meter;
   }
@@ -58,10 +58,15 @@ final class OrderSearch {
    * @param sizes how many nodes each unit will count for
    */
   static Diagram smallest(Knot knot, double[] sizes, WorkMeter meter) {
-    OrderSearch search = new OrderSearch(knot, sizes, meter);
-    for (int expression = 0; expression < knot.composer.count(); expression++) {
+    return smallest(knot.composer, knot.root, sizes, meter);
+  }
+
+  /** Builds the diagram of any expression that all of a composer is for. */
+  static Diagram smallest(Composer composer, int root, double[] sizes, WorkMeter meter) {
+    OrderSearch search = new OrderSearch(composer, root, sizes, meter);
+    for (int expression = 0; expression < composer.count(); expression++) {
       // once for all orders, and not within their limits
-      knot.composer.operatorOf(expression).template(meter);
+      composer.operatorOf(expression).template(meter);
     }
     if (search.hasChoice()) {
       search.run();

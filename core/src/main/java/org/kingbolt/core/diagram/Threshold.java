@@ -16,6 +16,11 @@ final class Threshold extends Operator {
     this.n = n;
   }
 
+  /** How many slots must work. */
+  int needed() {
+    return k;
+  }
+
   boolean isSeries() {
     return k == n;
   }
