@@ -109,7 +109,7 @@ public final class ImprovementFrontier {
   @Override
   public String toString() {
     StringBuilder out = new StringBuilder("efficient plans by ").append(resource);
-    PlanTable table = new PlanTable();
+    PlanTable table = new PlanTable(3);
     table.row(List.of(resource, "failing", "gain per " + resource, "options"));
     Point before = null;
     for (Point point : points) {

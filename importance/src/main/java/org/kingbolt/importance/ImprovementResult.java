@@ -176,7 +176,7 @@ public final class ImprovementResult {
   @Override
   public String toString() {
     StringBuilder out = new StringBuilder(question);
-    PlanTable table = new PlanTable();
+    PlanTable table = new PlanTable(0);
     List<String> heading = new ArrayList<>(List.of("step"));
     heading.addAll(costs.keySet());
     heading.addAll(List.of("failing after", "gain", "gain per " + resource));

@@ -123,9 +123,10 @@ final class PlanSearch {
         }
         double allowed = Math.log(best.fails()) - steps.count() * Math.log1p(tolerance);
         proved = Math.max(proved, Math.min(before, allowed));
+        double reached = Math.log(best.fails());
         boolean whole = sweep.lost() == Double.POSITIVE_INFINITY && gap == 0;
-        if (whole || Math.log(best.fails()) - proved <= Math.log1p(gap)) {
-          return new Answer(best, whole ? Math.log(best.fails()) : proved, whole);
+        if (whole || reached - proved <= Math.log1p(gap)) {
+          return new Answer(best, whole ? reached : proved, whole || reached <= proved);
         }
       }
     } catch (BudgetExceededException used) {

@@ -4,10 +4,16 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Locale;
 
-/** Rows of cells in aligned columns: the first to the left, numbers to the right. */
+/** Rows of cells in aligned columns: one of them to the left, numbers to the right. */
 final class PlanTable {
 
   private final List<List<String>> rows = new ArrayList<>();
+
+  private final int leftColumn;
+
+  PlanTable(int leftColumn) {
+    this.leftColumn = leftColumn;
+  }
 
   void row(List<String> cells) {
     rows.add(List.copyOf(cells));
@@ -37,7 +43,8 @@ final class PlanTable {
       for (int column = 0; column < row.size(); column++) {
         String cell = row.get(column);
         String blanks = " ".repeat(widths[column] - length(cell));
-        line.append(column == 0 ? "" : "  ").append(column == 0 ? cell + blanks : blanks + cell);
+        line.append(column == 0 ? "" : "  ");
+        line.append(column == leftColumn ? cell + blanks : blanks + cell);
       }
       out.append(line.toString().stripTrailing());
     }

@@ -14,7 +14,8 @@ final class Workloads {
             ReliabilityRows.rows(),
             BusRows.rows(),
             GateRows.rows(),
-            ScanRows.rows())
+            ScanRows.rows(),
+            PlanRows.rows())
         .flatMap(List::stream)
         .toList();
   }
