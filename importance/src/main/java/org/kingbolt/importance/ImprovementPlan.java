@@ -72,10 +72,7 @@ public final class ImprovementPlan {
       throw new IllegalArgumentException(
           "the structure has no components, so nothing can be improved; give one that has");
     }
-    PlanDescription description =
-        new PlanDescription(
-            structure, null, ImmutableList.of(), ImmutableList.of(), ImmutableList.of());
-    return new ImprovementPlan(description, Map.of(), Budget.ofHeap(), 0);
+    return new ImprovementPlan(PlanDescription.of(structure), Map.of(), Budget.ofHeap(), 0);
   }
 
   /**
@@ -95,14 +92,7 @@ public final class ImprovementPlan {
    * @return the plan with these probabilities
    */
   public ImprovementPlan given(Probabilities p) {
-    PlanCheck.notNull(p, "probabilities");
-    return with(
-        new PlanDescription(
-            description.structure(),
-            p,
-            description.options(),
-            description.allocations(),
-            description.limits()));
+    return with(description.given(PlanCheck.notNull(p, "probabilities")));
   }
 
   /**
@@ -134,13 +124,7 @@ public final class ImprovementPlan {
       }
       all.add(option);
     }
-    return with(
-        new PlanDescription(
-            description.structure(),
-            description.p(),
-            ImmutableList.copyOf(all),
-            description.allocations(),
-            description.limits()));
+    return with(description.choosingFrom(all, description.allocations()));
   }
 
   /**
@@ -162,13 +146,7 @@ public final class ImprovementPlan {
       }
       all.add(allocation);
     }
-    return with(
-        new PlanDescription(
-            description.structure(),
-            description.p(),
-            description.options(),
-            ImmutableList.copyOf(all),
-            description.limits()));
+    return with(description.choosingFrom(description.options(), all));
   }
 
   /**
@@ -223,16 +201,7 @@ public final class ImprovementPlan {
     }
     PlanDescription.Named limit = new PlanDescription.Named(kind, ImmutableList.copyOf(options));
     PlanCheck.naming(rule, () -> limit.numbered(numbers));
-    return with(
-        new PlanDescription(
-            description.structure(),
-            description.p(),
-            description.options(),
-            description.allocations(),
-            ImmutableList.<PlanDescription.Named>builder()
-                .addAll(description.limits())
-                .add(limit)
-                .build()));
+    return with(description.limited(limit));
   }
 
   /**

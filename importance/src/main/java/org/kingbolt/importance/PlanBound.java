@@ -130,6 +130,11 @@ final class PlanBound {
     return root;
   }
 
+  /** A quick bound: with everything to come at its best. */
+  double simple(int step, PlanLabels labels, int label) {
+    return ceiling.log(step, labels, label);
+  }
+
   /** A bound for the plans that a partial one leads to, with these amounts left to spend. */
   double of(int step, PlanLabels labels, int label, long[] left, double[] logs) {
     int width = labels.width;

@@ -1,6 +1,7 @@
 package org.kingbolt.importance;
 
 import com.google.common.collect.ImmutableList;
+import java.util.List;
 import java.util.Map;
 import org.jspecify.annotations.Nullable;
 import org.kingbolt.core.Probabilities;
@@ -21,6 +22,26 @@ record PlanDescription(
     ImmutableList<ImprovementOption> options,
     ImmutableList<ImprovementAllocation> allocations,
     ImmutableList<Named> limits) {
+
+  static PlanDescription of(Structure structure) {
+    return new PlanDescription(
+        structure, null, ImmutableList.of(), ImmutableList.of(), ImmutableList.of());
+  }
+
+  PlanDescription given(Probabilities present) {
+    return new PlanDescription(structure, present, options, allocations, limits);
+  }
+
+  PlanDescription choosingFrom(
+      List<ImprovementOption> all, List<ImprovementAllocation> allAllocations) {
+    return new PlanDescription(
+        structure, p, ImmutableList.copyOf(all), ImmutableList.copyOf(allAllocations), limits);
+  }
+
+  PlanDescription limited(Named limit) {
+    ImmutableList<Named> all = ImmutableList.<Named>builder().addAll(limits).add(limit).build();
+    return new PlanDescription(structure, p, options, allocations, all);
+  }
 
   /**
    * A rule over options by name.

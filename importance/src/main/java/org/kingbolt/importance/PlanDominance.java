@@ -21,20 +21,27 @@ final class PlanDominance {
   private final double tolerance;
   private final double[] least;
   private final double[] most;
+  private final double spare;
   private final WorkMeter meter;
 
   /** Sorts by one resource first; takes the least and the most that the weights can be. */
-  PlanDominance(int first, double tolerance, double[] least, double[] most, WorkMeter meter) {
+  PlanDominance(
+      int first, double tolerance, double[] least, double[] most, double spare, WorkMeter meter) {
     this.first = first;
     this.tolerance = tolerance;
     this.least = least;
     this.most = most;
+    this.spare = spare;
     this.meter = meter;
   }
 
   /** The rows to keep, by key, then cost. */
   int[] kept(PlanLabels labels) {
-    int[] order = PlanSort.sorted(labels.size, (a, b) -> compare(labels, a, b));
+    double[] sums = new double[labels.size];
+    for (int row = 0; row < labels.size; row++) {
+      sums[row] = middle(labels, row);
+    }
+    int[] order = PlanSort.sorted(labels.size, (a, b) -> compare(labels, sums, a, b));
     int[] kept = new int[order.length];
     int size = 0;
     int from = 0;
@@ -46,7 +53,7 @@ final class PlanDominance {
       size =
           labels.resources <= 2 && labels.width == 1 && comparable(labels)
               ? byStairs(labels, order, from, to, kept, size)
-              : byScan(labels, order, from, to, kept, size);
+              : byScan(labels, sums, order, from, to, kept, size);
       from = to;
     }
     return Arrays.copyOf(kept, size);
@@ -62,7 +69,7 @@ final class PlanDominance {
     return true;
   }
 
-  private int compare(PlanLabels labels, int a, int b) {
+  private int compare(PlanLabels labels, double[] all, int a, int b) {
     int resources = labels.resources;
     int result = Integer.compare(labels.key[a], labels.key[b]);
     if (result == 0) {
@@ -71,6 +78,7 @@ final class PlanDominance {
     for (int r = 0; r < resources && result == 0; r++) {
       result = Long.compare(labels.cost[a * resources + r], labels.cost[b * resources + r]);
     }
+    result = result == 0 && labels.width > 1 ? Double.compare(all[a], all[b]) : result;
     for (int place = 0; place < labels.width && result == 0; place++) {
       result = Double.compare(labels.rank(a, place), labels.rank(b, place));
     }
@@ -109,7 +117,8 @@ final class PlanDominance {
     return size;
   }
 
-  private int byScan(PlanLabels labels, int[] order, int from, int to, int[] kept, int start) {
+  private int byScan(
+      PlanLabels labels, double[] all, int[] order, int from, int to, int[] kept, int start) {
     int size = start;
     int[] recent = new int[to - from];
     double[] sums = new double[to - from];
@@ -117,8 +126,8 @@ final class PlanDominance {
     for (int i = from; i < to; i++) {
       meter.at(labels.size);
       int row = order[i];
-      double sum = middle(labels, row);
-      double enough = sum * (1 + tolerance) + tolerance;
+      double sum = all[row];
+      double enough = sum * (1 + tolerance);
       int winner = -1;
       int checks = 0;
       for (int at = count - 1; at >= 0 && winner < 0 && checks < CHECKS; at--) {
@@ -166,6 +175,8 @@ final class PlanDominance {
     }
     int width = labels.width;
     double sum = 0;
+    double atMost = 0;
+    double gain = 0;
     for (int place = 0; place < width; place++) {
       int i = a * width + place;
       int j = b * width + place;
@@ -175,7 +186,9 @@ final class PlanDominance {
               : labels.works[j] - labels.works[i];
       more -= tolerance * labels.fails[j];
       sum += more * (more > 0 ? most[place] : least[place]);
+      atMost += more * most[place];
+      gain = Math.max(gain, -more);
     }
-    return sum <= 0;
+    return sum <= 0 || atMost + spare * gain <= 0;
   }
 }

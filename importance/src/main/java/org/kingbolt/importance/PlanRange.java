@@ -10,7 +10,16 @@ package org.kingbolt.importance;
  */
 record PlanRange(double leastWorking, double mostFailing, double mostWorking, double leastFailing) {
 
-  static PlanRange of(PlanModel model, int variable) {
+  /** Those of the variables that are read, by step. */
+  static PlanRange[] all(PlanModel model, PlanSteps steps) {
+    PlanRange[] ranges = new PlanRange[steps.count()];
+    for (int at = 0; at < ranges.length; at++) {
+      ranges[at] = of(model, steps.variable(at));
+    }
+    return ranges;
+  }
+
+  private static PlanRange of(PlanModel model, int variable) {
     boolean present = !isAlwaysSet(model, variable);
     double worstWorks = present ? model.working()[variable] : 1;
     double worstFails = present ? model.failing()[variable] : 0;

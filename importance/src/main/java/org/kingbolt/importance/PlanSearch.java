@@ -43,7 +43,7 @@ final class PlanSearch {
     this.steps = new PlanSteps(model.system().diagram(), meter);
     PlanOrder order = new PlanOrder(model, steps);
     this.menus = new PlanMenus(model, steps, order, meter);
-    this.reach = new PlanReach(model, steps);
+    this.reach = new PlanReach(steps, PlanRange.all(model, steps));
     this.relaxed = new PlanAlternative[steps.count()][];
     for (int at = 0; at < relaxed.length; at++) {
       relaxed[at] = menus.relaxed(at);
@@ -93,8 +93,9 @@ final class PlanSearch {
     try {
       PlanBound bound = new PlanBound(steps, relaxed, goal.limits(), start, meter);
       proved = bound.root();
-      double tolerance = Math.expm1(Math.log1p(gap / 2) / steps.count());
+      double tolerance = Math.expm1(Math.log1p(gap) / 2 / steps.count());
       for (int room = FIRST_ROOM; room <= MOST_ROOM; room *= GROWTH) {
+        double slack = steps.count() * Math.log1p(tolerance);
         double cutoff = best == null ? Double.POSITIVE_INFINITY : cutoff(best);
         PlanSweep sweep =
             new PlanSweep(
@@ -121,9 +122,8 @@ final class PlanSearch {
         if (best.fails() == 0) {
           return new Answer(best, Double.NEGATIVE_INFINITY, true);
         }
-        double allowed = Math.log(best.fails()) - steps.count() * Math.log1p(tolerance);
-        proved = Math.max(proved, Math.min(before, allowed));
         double reached = Math.log(best.fails());
+        proved = Math.max(proved, Math.min(before, reached) - slack);
         boolean whole = sweep.lost() == Double.POSITIVE_INFINITY && gap == 0;
         if (whole || reached - proved <= Math.log1p(gap)) {
           return new Answer(best, whole ? reached : proved, whole || reached <= proved);
@@ -138,7 +138,7 @@ final class PlanSearch {
 
   /** With a gap allowed, plans are of interest only if they are better by half of it. */
   private double cutoff(PlanFound found) {
-    return Math.log(found.fails()) - Math.log1p(gap / 2);
+    return Math.log(found.fails()) - Math.log1p(gap) / 2;
   }
 
   private void refuse(BudgetExceededException used) {

@@ -131,7 +131,11 @@ final class PlanSweep {
         after.key[row] = alternative.key();
         after.parent[row] = label;
         after.choice[row] = choice;
-        if (!promises(at, after, row, left, logs)) {
+        boolean promising =
+            width == 1
+                ? promises(at, after, row, left, logs)
+                : bound == null || bound.simple(at, after, row) <= logCutoff + SLACK;
+        if (!promising) {
           after.drop();
         }
       }
@@ -173,10 +177,30 @@ final class PlanSweep {
     return labels.bound[row] <= logCutoff + SLACK;
   }
 
+  private int[] promising(int at, PlanLabels labels, int[] rows) {
+    int resources = labels.resources;
+    long[] left = new long[resources];
+    double[] logs = new double[labels.width];
+    int size = 0;
+    for (int row : rows) {
+      meter.at(labels.size);
+      for (int r = 0; r < resources; r++) {
+        left[r] = limits[r] - labels.cost[row * resources + r];
+      }
+      if (promises(at, labels, row, left, logs)) {
+        rows[size++] = row;
+      }
+    }
+    return Arrays.copyOf(rows, size);
+  }
+
   private PlanLabels reduced(int at, PlanLabels labels) {
     int first = goal.kind() == PlanGoal.Kind.BEST ? 0 : goal.resource();
-    int[] kept =
-        new PlanDominance(first, tolerance, reach.least(at), reach.most(at), meter).kept(labels);
+    double spare = reach.spare(at, Math.exp(logCutoff + SLACK));
+    int[] unbeaten =
+        new PlanDominance(first, tolerance, reach.least(at), reach.most(at), spare, meter)
+            .kept(labels);
+    int[] kept = labels.width == 1 ? unbeaten : promising(at, labels, unbeaten);
     if (kept.length > most) {
       int[] order =
           PlanSort.sorted(

@@ -46,13 +46,13 @@ class ImprovementPlanPropertyTest {
     return plans(2);
   }
 
-  @Property(tries = 250, shrinking = ShrinkingMode.OFF)
+  @Property(tries = 400, shrinking = ShrinkingMode.OFF)
   void bestWithin_isTheBestOfAll(
       @ForAll("ofMoney") RandomPlan random, @ForAll("tenths") double budget) {
     checkBest(random, Map.of("money", budget));
   }
 
-  @Property(tries = 200, shrinking = ShrinkingMode.OFF)
+  @Property(tries = 300, shrinking = ShrinkingMode.OFF)
   void bestWithinTwo_isTheBestOfAll(
       @ForAll("ofTwo") RandomPlan random,
       @ForAll("tenths") double money,
@@ -102,7 +102,7 @@ class ImprovementPlanPropertyTest {
         result.nextBest().map(next -> next.gain() > 0).orElse(true), "a step that helps is next");
   }
 
-  @Property(tries = 200, shrinking = ShrinkingMode.OFF)
+  @Property(tries = 300, shrinking = ShrinkingMode.OFF)
   void cheapestReaching_isTheCheapestOfAll(
       @ForAll("ofTwo") RandomPlan random, @ForAll("tenths") double days, @ForAll int pick) {
     List<RandomPlan.Choice> within =
@@ -129,7 +129,7 @@ class ImprovementPlanPropertyTest {
     checkExplained(random, result);
   }
 
-  @Property(tries = 200, shrinking = ShrinkingMode.OFF)
+  @Property(tries = 300, shrinking = ShrinkingMode.OFF)
   void frontier_isThatOfAll(@ForAll("ofTwo") RandomPlan random, @ForAll("tenths") double days) {
     List<RandomPlan.Choice> within =
         random.choices().stream().filter(choice -> choice.cost("days") <= days).toList();

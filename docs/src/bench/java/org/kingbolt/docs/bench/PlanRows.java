@@ -142,7 +142,7 @@ final class PlanRows {
 
   /** Gates of which a fifth of the leaves repeat a component; replacements, spares, tests. */
   private static Prepared options() {
-    Structure structure = new NestedGates(60, 14, 12, SEED).structure();
+    Structure structure = new NestedGates(14, 60, 12, SEED).structure();
     Random random = new Random(SEED);
     List<String> components = structure.components();
     double[] failing = Inputs.failing(components.size(), 0.005, 0.1);
