@@ -18,7 +18,8 @@ final class Workloads {
             PolynomialRows.rows(),
             IntervalRows.rows(),
             SetRows.rows(),
-            ImportanceRows.rows())
+            ImportanceRows.rows(),
+            PlanRows.rows())
         .flatMap(List::stream)
         .toList();
   }
