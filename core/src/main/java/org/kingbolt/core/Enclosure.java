@@ -113,7 +113,7 @@ public final class Enclosure {
       between(true);
       started = true;
     }
-    while (!relaxer.step(effort, meter) && isEvaluated()) {
+    while (!relaxer.step(effort, mostEffort, meter) && isEvaluated()) {
       if (gateEffort == mostEffort && (effort == mostEffort || relaxer.isExact())) {
         return false;
       }

@@ -40,6 +40,8 @@ final class NetworkEnclosure {
 
   private static final int IDLE_STEPS = 2;
 
+  private static final int EXCERPTS = 8;
+
   private enum Means {
     NOTHING,
     WHOLE,
@@ -92,28 +94,30 @@ final class NetworkEnclosure {
   /**
    * Takes one step.
    *
-   * @param most how many nodes may be held
+   * @param effort how many nodes a sweep may hold
+   * @param most how many nodes may be held at all; excerpts, which are only as large as they must
+   *     be, may hold several times the effort
    * @return whether another step of this size may help
    */
-  boolean step(long most, WorkMeter meter) {
+  boolean step(long effort, long most, WorkMeter meter) {
     if (isExact()) {
       return false;
     }
-    if (level != most) {
-      level = most;
+    if (level != effort) {
+      level = effort;
       boolean isWide = firstWidth > NARROW && !growth.hasManyTerminals();
-      swept = firstWidth > WIDE || (isWide && most < WORTH_A_PLAN);
+      swept = firstWidth > WIDE || (isWide && effort < WORTH_A_PLAN);
       grown = false;
       idle = 0;
       growth.retry();
     }
     if (!swept && (grown || firstWidth <= NARROW || growth.hasManyTerminals())) {
       swept = true;
-      sweep(most, meter);
+      sweep(effort, meter);
       return !isExact();
     }
     if (!grown) {
-      grown = !grow(most, meter);
+      grown = !grow(Math.min(most, EXCERPTS * effort), meter);
     }
     return !grown || !swept;
   }

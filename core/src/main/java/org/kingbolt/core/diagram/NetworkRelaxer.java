@@ -48,16 +48,17 @@ public final class NetworkRelaxer {
    * Takes one step with the network of which least is known; networks come to be known as the
    * structure is first expressed.
    *
-   * @param most how many nodes may be held
+   * @param effort how many nodes may be held, in general
+   * @param most how many nodes may be held at all
    * @param meter hears of the work
    * @return whether another step of this size may help
    */
-  public boolean step(long most, WorkMeter meter) {
+  public boolean step(long effort, long most, WorkMeter meter) {
     List<NetworkEnclosure> open = new ArrayList<>(networks);
     open.removeIf(NetworkEnclosure::isExact);
     open.sort((a, b) -> Double.compare(b.gap(), a.gap()));
     for (NetworkEnclosure network : open) {
-      if (network.step(most, meter)) {
+      if (network.step(effort, most, meter)) {
         return true;
       }
     }

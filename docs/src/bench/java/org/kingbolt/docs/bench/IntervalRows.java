@@ -33,7 +33,33 @@ final class IntervalRows {
       rows.add(
           row("1354-bus, all buses, failing " + q + ": to 0.1 %", q, 0.001, () -> buses(true)));
     }
+    for (int seed = 1; seed <= 3; seed++) {
+      rows.add(plant(seed));
+    }
     return rows;
+  }
+
+  /** Two thousand components, one in five shared, failing with 0.001 to 0.01. */
+  private static Workload plant(long seed) {
+    return new Workload(
+        "2,000 components, 400 shared, seed " + seed + ": to 1 %",
+        Effort.USUAL,
+        List.of(),
+        () -> {
+          Structure structure = SharedPlant.of(2_000, 400, seed);
+          double[] failing = Inputs.failing(structure.components().size(), 0.001, 0.01);
+          Probabilities p = Inputs.probabilities(structure.components(), failing);
+          return prepared(structure, p, 0.01);
+        });
+  }
+
+  private static Prepared prepared(Structure structure, Probabilities p, double relativeWidth) {
+    return new Prepared(
+        structure.components().size(),
+        "components",
+        "relative width",
+        () -> width(structure, p, relativeWidth),
+        Map.of());
   }
 
   private static Workload row(
@@ -44,13 +70,8 @@ final class IntervalRows {
         List.of(),
         () -> {
           Structure structure = input.get();
-          Probabilities p = Probabilities.all(Probability.failing(failing));
-          return new Prepared(
-              structure.components().size(),
-              "links",
-              "relative width",
-              () -> width(structure, p, relativeWidth),
-              Map.of());
+          return prepared(
+              structure, Probabilities.all(Probability.failing(failing)), relativeWidth);
         });
   }
 
