@@ -56,6 +56,17 @@ final class Compilation {
     return within(() -> expression(numbering, composer, meter).expect(working, failing, meter));
   }
 
+  /**
+   * The diagram of a structure that works less often, or more often, than this one.
+   *
+   * @param relaxer chooses for the networks
+   */
+  static Diagram oneSidedDiagram(Numbering numbering, NetworkRelaxer relaxer, WorkMeter meter) {
+    Composer composer = new Composer(0);
+    composer.relax(relaxer);
+    return within(() -> expression(numbering, composer, meter).compose(meter));
+  }
+
   static int widestFrontier(Structure structure) {
     WorkMeter meter = WorkMeter.UNLIMITED;
     return expression(new Numbering(structure, meter), meter).composer.widestFrontier();
