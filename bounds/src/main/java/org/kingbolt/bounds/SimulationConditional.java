@@ -12,15 +12,39 @@ import org.kingbolt.core.diagram.Diagram;
  */
 final class SimulationConditional implements SimulationTrial {
 
-  /** What all threads share. */
-  private record Shared(
-      Structure structure,
-      SimulationStates states,
-      Diagram diagram,
-      boolean failing,
-      int[] variable,
-      double[] lowShare,
-      double[] highShare) {}
+  /** What all threads share: the diagram, and how likely it is to turn either way at each node. */
+  private static final class Shared {
+    private final Structure structure;
+    private final SimulationStates states;
+    private final Diagram diagram;
+    private final boolean failing;
+    private final int[] variable;
+    private final double[] lowShare;
+    private final double[] highShare;
+    private final double probability;
+
+    Shared(Structure structure, SimulationStates states, Diagram diagram, boolean failing) {
+      this.structure = structure;
+      this.states = states;
+      this.diagram = diagram;
+      this.failing = failing;
+      this.variable = new int[diagram.size()];
+      this.lowShare = new double[diagram.size()];
+      this.highShare = new double[diagram.size()];
+      double[] value = values(states, diagram, !failing);
+      this.probability = value[diagram.root()];
+      for (int level = 0; level < diagram.levels(); level++) {
+        int component = diagram.variableAt(level);
+        for (int id = diagram.from(level); id < diagram.to(level); id++) {
+          variable[id] = component;
+          double low = states.failing[component] * value[diagram.low(id)];
+          double high = states.working[component] * value[diagram.high(id)];
+          lowShare[id] = low / (low + high);
+          highShare[id] = high / (low + high);
+        }
+      }
+    }
+  }
 
   private final Shared shared;
   private final StateEvaluator evaluator;
@@ -45,30 +69,15 @@ final class SimulationConditional implements SimulationTrial {
       Diagram diagram,
       boolean failing,
       boolean whole) {
-    double[] value = values(states, diagram, !failing);
-    double other = values(states, diagram, failing)[diagram.root()];
-    int[] variable = new int[diagram.size()];
-    double[] lowShare = new double[diagram.size()];
-    double[] highShare = new double[diagram.size()];
-    for (int level = 0; level < diagram.levels(); level++) {
-      int component = diagram.variableAt(level);
-      for (int id = diagram.from(level); id < diagram.to(level); id++) {
-        variable[id] = component;
-        double low = states.failing[component] * value[diagram.low(id)];
-        double high = states.working[component] * value[diagram.high(id)];
-        lowShare[id] = low / (low + high);
-        highShare[id] = high / (low + high);
-      }
-    }
-    Shared shared = new Shared(structure, states, diagram, failing, variable, lowShare, highShare);
+    Shared shared = new Shared(structure, states, diagram, failing);
     return new SimulationModel(
         () -> new SimulationConditional(shared),
         failing,
-        value[diagram.root()],
-        other,
+        shared.probability,
+        values(states, diagram, failing)[diagram.root()],
         4L * diagram.levels(),
         "conditional Monte Carlo",
-        reason(value[diagram.root()], failing, whole));
+        reason(shared.probability, failing, whole));
   }
 
   private static String reason(double probability, boolean failing, boolean whole) {

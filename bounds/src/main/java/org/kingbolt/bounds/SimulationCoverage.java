@@ -18,11 +18,39 @@ import org.kingbolt.core.diagram.WorkMeter;
 final class SimulationCoverage implements SimulationTrial {
 
   /** One set: its probability, and the members by number. */
-  private record Weighted(double weight, int[] members) {}
+  private static final class Weighted {
+    private final double weight;
+    private final int[] members;
+
+    Weighted(double weight, int[] members) {
+      this.weight = weight;
+      this.members = members;
+    }
+  }
 
   /** What all threads share; sums run over the sets' probabilities. */
-  private record Shared(
-      SimulationStates states, boolean cuts, List<Weighted> sets, double[] sums) {}
+  private static final class Shared {
+    private final SimulationStates states;
+    private final boolean cuts;
+    private final List<Weighted> sets;
+    private final double[] sums;
+
+    Shared(SimulationStates states, boolean cuts, List<Weighted> sets) {
+      this.states = states;
+      this.cuts = cuts;
+      this.sets = sets;
+      this.sums = new double[sets.size()];
+      double sum = 0;
+      for (int i = 0; i < sums.length; i++) {
+        sum += sets.get(i).weight;
+        sums[i] = sum;
+      }
+    }
+
+    double sum() {
+      return sums.length == 0 ? 0 : sums[sums.length - 1];
+    }
+  }
 
   private final Shared shared;
   private final boolean[] state;
@@ -64,25 +92,20 @@ final class SimulationCoverage implements SimulationTrial {
     }
     reader.requireSome();
     sets.sort(Comparator.comparingDouble((Weighted set) -> -set.weight));
-    double[] sums = new double[sets.size()];
-    double sum = 0;
-    for (int i = 0; i < sums.length; i++) {
-      sum += sets.get(i).weight;
-      sums[i] = sum;
-    }
-    Shared shared = new Shared(states, cuts, sets, sums);
+    Shared shared = new Shared(states, cuts, sets);
+    double sum = shared.sum();
     return new SimulationModel(
         () -> new SimulationCoverage(shared),
         cuts,
         sum,
         1 - sum,
-        sums.length + (long) states.size(),
+        sets.size() + (long) states.size(),
         "coverage by " + (cuts ? "cut" : "path") + " sets",
         (cuts
                 ? "the system fails only when a cut set does"
                 : "the system works only when a path does")
             + "; the probabilities of the "
-            + sums.length
+            + sets.size()
             + " sets add up to "
             + sum
             + ", and the number of states that are drawn with the first of their sets is binomial");

@@ -1,6 +1,7 @@
 package org.kingbolt.bounds;
 
 import java.time.Duration;
+import java.util.Optional;
 import java.util.function.Function;
 import org.kingbolt.core.Budget;
 import org.kingbolt.core.BudgetExceededException;
@@ -16,16 +17,15 @@ final class SimulationPlan {
   /** A simpler system that fails so much more often at most is near enough. */
   private static final double NEAR = 1.25;
 
-  /** With fewer nodes than these no simpler system is tried. */
-  private static final long FEWEST_NODES = 16;
-
-  private static final int FEWER = 8;
+  private static final long FIRST_NODES = 1 << 12;
+  private static final int MORE = 8;
 
   private final Structure structure;
   private final Probabilities p;
   private final SimulationStates states;
   private final Simulation simulation;
   private final Function<Budget, CoherentSystem> compiled;
+  private final long started = System.nanoTime();
 
   private SimulationPlan(
       Structure structure,
@@ -49,9 +49,9 @@ final class SimulationPlan {
       Probabilities p,
       Simulation simulation,
       Function<Budget, CoherentSystem> compiled) {
-    long started = System.nanoTime();
-    SimulationModel model = new SimulationPlan(structure, p, simulation, compiled).model();
-    return new SimulationRun(model, simulation, started, !simulation.hasTime()).estimate();
+    SimulationPlan plan = new SimulationPlan(structure, p, simulation, compiled);
+    SimulationModel model = plan.model();
+    return new SimulationRun(model, simulation, plan.started).estimate();
   }
 
   private SimulationModel model() {
@@ -67,7 +67,7 @@ final class SimulationPlan {
     try {
       return conditional();
     } catch (BudgetExceededException over) {
-      if (over.limit() == BudgetExceededException.Limit.INTERRUPT) {
+      if (isInterrupt(over)) {
         throw over;
       }
       return SimulationCrude.model(structure, states);
@@ -90,32 +90,52 @@ final class SimulationPlan {
         budget.start("listing minimal sets"));
   }
 
-  /** With ever fewer nodes, as what is exact may be a diagram that is too large to keep. */
+  /** With ever more nodes, until the simpler system is near enough. */
   private SimulationModel conditional() {
-    Budget budget = simulation.budget();
-    Budget less = budget;
+    long most = simulation.budget().nodes();
+    long nodes = Math.min(most, Math.max(FIRST_NODES, 16L * states.size()));
+    Optional<SimulationModel> best = Optional.empty();
     while (true) {
+      Enclosure enclosure = Enclosure.of(structure, p, budget(nodes));
       try {
-        return conditional(less, budget);
+        boolean near = narrow(enclosure);
+        SimulationModel model = conditional(enclosure);
+        if (best.isEmpty() || isRarer(model, best.get())) {
+          best = Optional.of(model);
+        }
+        if (near || nodes == most) {
+          return best.get();
+        }
       } catch (BudgetExceededException over) {
-        if (over.limit() != BudgetExceededException.Limit.NODES
-            || less.nodes() / FEWER < FEWEST_NODES) {
+        boolean goOn = over.limit() == BudgetExceededException.Limit.NODES && nodes < most;
+        if (!goOn && (best.isEmpty() || isInterrupt(over))) {
           throw over;
         }
-        less = fewer(less);
+        if (!goOn) {
+          return best.get();
+        }
       }
+      nodes = Math.min(most, MORE * nodes);
     }
   }
 
-  private Budget fewer(Budget budget) {
-    Budget fewer = Budget.ofNodes(budget.nodes() / FEWER);
-    return simulation.hasTime()
-        ? fewer.withTime(Duration.ofNanos(Math.max(1, simulation.nanos() / 4)))
-        : fewer;
+  private static boolean isInterrupt(BudgetExceededException over) {
+    return over.limit() == BudgetExceededException.Limit.INTERRUPT;
   }
 
-  private SimulationModel conditional(Budget effort, Budget whole) {
-    Enclosure enclosure = Enclosure.of(structure, p, effort);
+  /** What is left of the preparation's time. */
+  private Budget budget(long nodes) {
+    Budget budget = simulation.budget();
+    if (nodes == budget.nodes() && !simulation.hasTime()) {
+      return budget;
+    }
+    Budget part = Budget.ofNodes(nodes);
+    long left = simulation.nanos() / 2 - (System.nanoTime() - started);
+    return simulation.hasTime() ? part.withTime(Duration.ofNanos(Math.max(1, left))) : part;
+  }
+
+  /** Narrows until the simpler system is near enough; false if it will not be. */
+  private static boolean narrow(Enclosure enclosure) {
     try {
       while (ratio(enclosure) > NEAR && enclosure.narrow()) {}
     } catch (BudgetExceededException over) {
@@ -123,9 +143,19 @@ final class SimulationPlan {
         throw over;
       }
     }
+    return !(ratio(enclosure) > NEAR);
+  }
+
+  private SimulationModel conditional(Enclosure enclosure) {
     boolean failing = isFailingRarer(enclosure);
-    Diagram diagram = failing ? enclosure.lessWorking(whole) : enclosure.moreWorking(whole);
+    Budget budget = budget(simulation.budget().nodes());
+    Diagram diagram = failing ? enclosure.lessWorking(budget) : enclosure.moreWorking(budget);
     return SimulationConditional.model(structure, states, diagram, failing, enclosure.isExact());
+  }
+
+  /** Whether what a simpler system fails at, or works at, is less likely. */
+  private static boolean isRarer(SimulationModel one, SimulationModel other) {
+    return one.scale() < other.scale();
   }
 
   private static boolean isFailingRarer(Enclosure enclosure) {

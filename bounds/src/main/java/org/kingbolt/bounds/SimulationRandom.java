@@ -21,10 +21,14 @@ final class SimulationRandom {
 
   SimulationRandom(long seed, long stage, long batch) {
     long mixed = mix(mix(mix(seed + GOLDEN) + stage + GOLDEN) + batch + GOLDEN);
-    a = mix(mixed + GOLDEN);
-    b = mix(mixed + 2 * GOLDEN);
-    c = mix(mixed + 3 * GOLDEN);
-    d = mix(mixed + 4 * GOLDEN);
+    mixed += GOLDEN;
+    a = mix(mixed);
+    mixed += GOLDEN;
+    b = mix(mixed);
+    mixed += GOLDEN;
+    c = mix(mixed);
+    mixed += GOLDEN;
+    d = mix(mixed);
   }
 
   private static long mix(long value) {

@@ -28,12 +28,11 @@ final class SimulationRun {
    * Prepares.
    *
    * @param started when the clock started, in nanoseconds
-   * @param reproducible whether neither the clock nor the size of the heap has a say
    */
-  SimulationRun(SimulationModel model, Simulation simulation, long started, boolean reproducible) {
+  SimulationRun(SimulationModel model, Simulation simulation, long started) {
     this.model = model;
     this.simulation = simulation;
-    this.reproducible = reproducible;
+    this.reproducible = !simulation.hasTime();
     this.missed = 1 - simulation.confidence();
     this.crew =
         new SimulationCrew(
@@ -90,7 +89,7 @@ final class SimulationRun {
     EstimateShare share = EstimateShare.of(tally.hits(), tally.samples(), DOUBTFUL_PLAN);
     double certain = 2 * Math.log(2 / missed) / error;
     double samples = (hitsNeeded * share.highMiss() + certain) / share.low();
-    double batches = Math.ceil(samples / SimulationCrew.BATCH);
-    return batches * SimulationCrew.BATCH < most ? (long) batches * SimulationCrew.BATCH : most;
+    double whole = Math.ceil(samples / SimulationCrew.BATCH) * SimulationCrew.BATCH;
+    return whole < most ? (long) whole : most;
   }
 }
