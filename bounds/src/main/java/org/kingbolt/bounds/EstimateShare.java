@@ -27,7 +27,10 @@ record EstimateShare(double low, double high, double lowMiss, double highMiss) {
     double fewer = Math.min(hits, samples - hits);
     double others = samples - fewer;
     double low = fewer == 0 ? 0 : below(fewer, others + 1, missed / 2);
-    double high = above(fewer + 1, others, missed / 2);
+    double high =
+        fewer == 0
+            ? -Math.expm1(Math.log(missed / 2) / samples)
+            : above(fewer + 1, others, missed / 2);
     return hits <= samples - hits
         ? new EstimateShare(low, high, 1 - high, 1 - low)
         : new EstimateShare(1 - high, 1 - low, low, high);

@@ -18,6 +18,7 @@ final class SimulationPlan {
   private static final double NEAR = 1.25;
 
   private static final long FIRST_NODES = 1 << 12;
+  private static final long FEWEST_NODES = 16;
   private static final int MORE = 8;
 
   private final Structure structure;
@@ -94,29 +95,46 @@ final class SimulationPlan {
   private SimulationModel conditional() {
     long most = simulation.budget().nodes();
     long nodes = Math.min(most, Math.max(FIRST_NODES, 16L * states.size()));
+    long first = nodes;
     Optional<SimulationModel> best = Optional.empty();
     while (true) {
-      Enclosure enclosure = Enclosure.of(structure, p, budget(nodes));
       try {
+        Enclosure enclosure = Enclosure.of(structure, p, budget(nodes));
         boolean near = narrow(enclosure);
         SimulationModel model = conditional(enclosure);
-        if (best.isEmpty() || isRarer(model, best.get())) {
+        if (best.isEmpty() || model.scale() < best.get().scale()) {
           best = Optional.of(model);
         }
         if (near || nodes == most) {
           return best.get();
         }
       } catch (BudgetExceededException over) {
-        boolean goOn = over.limit() == BudgetExceededException.Limit.NODES && nodes < most;
-        if (!goOn && (best.isEmpty() || isInterrupt(over))) {
+        if (isInterrupt(over)) {
           throw over;
         }
-        if (!goOn) {
-          return best.get();
+        boolean tooLarge = over.limit() == BudgetExceededException.Limit.NODES;
+        if (!tooLarge || nodes == most) {
+          return best.orElseGet(() -> smaller(first, over));
         }
       }
       nodes = Math.min(most, MORE * nodes);
     }
+  }
+
+  /** With ever fewer nodes: what is exact may be a diagram that is too large to keep. */
+  private SimulationModel smaller(long first, BudgetExceededException reason) {
+    for (long nodes = first / 2; nodes >= FEWEST_NODES; nodes /= 2) {
+      try {
+        Enclosure enclosure = Enclosure.of(structure, p, budget(nodes));
+        narrow(enclosure);
+        return conditional(enclosure);
+      } catch (BudgetExceededException over) {
+        if (over.limit() != BudgetExceededException.Limit.NODES) {
+          throw over;
+        }
+      }
+    }
+    throw reason;
   }
 
   private static boolean isInterrupt(BudgetExceededException over) {
@@ -151,11 +169,6 @@ final class SimulationPlan {
     Budget budget = budget(simulation.budget().nodes());
     Diagram diagram = failing ? enclosure.lessWorking(budget) : enclosure.moreWorking(budget);
     return SimulationConditional.model(structure, states, diagram, failing, enclosure.isExact());
-  }
-
-  /** Whether what a simpler system fails at, or works at, is less likely. */
-  private static boolean isRarer(SimulationModel one, SimulationModel other) {
-    return one.scale() < other.scale();
   }
 
   private static boolean isFailingRarer(Enclosure enclosure) {

@@ -14,7 +14,8 @@ final class Workloads {
             ReliabilityRows.rows(),
             BusRows.rows(),
             GateRows.rows(),
-            ScanRows.rows())
+            ScanRows.rows(),
+            SimulationRows.rows())
         .flatMap(List::stream)
         .toList();
   }
