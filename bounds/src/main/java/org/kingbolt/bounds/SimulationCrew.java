@@ -31,7 +31,9 @@ final class SimulationCrew {
     }
   }
 
+  private final SimulationModel model;
   private final long seed;
+  private final int threads;
   private final long started;
   private final long allowed;
   private final List<SimulationTrial> trials = new ArrayList<>();
@@ -44,12 +46,11 @@ final class SimulationCrew {
    * @param allowed for how many nanoseconds further batches may be begun
    */
   SimulationCrew(SimulationModel model, long seed, int threads, long started, long allowed) {
+    this.model = model;
     this.seed = seed;
+    this.threads = threads;
     this.started = started;
     this.allowed = allowed;
-    while (trials.size() < threads) {
-      trials.add(model.trials().get());
-    }
   }
 
   boolean isTimeOver() {
@@ -66,6 +67,9 @@ final class SimulationCrew {
   Tally draw(long stage, Tally done, long samples) {
     Work work = new Work(stage, done.samples / BATCH, samples);
     long batches = (samples - 1) / BATCH + 1 - work.first;
+    while (trials.size() < Math.min(batches, threads)) {
+      trials.add(model.trials().get());
+    }
     List<Thread> helpers = new ArrayList<>();
     try {
       for (SimulationTrial trial : trials.subList(1, (int) Math.min(batches, trials.size()))) {

@@ -14,10 +14,10 @@ final class SimulationRows {
   private SimulationRows() {}
 
   static List<Workload> rows() {
-    return List.of(toOnePercent(10, 1e-4), toOnePercent(30, 1e-3), toOnePercent(30, 1e-2));
+    return List.of(toOnePercent(10, "1e-4"), toOnePercent(30, "1e-3"), toOnePercent(30, "1e-2"));
   }
 
-  private static Workload toOnePercent(int side, double failing) {
+  private static Workload toOnePercent(int side, String failing) {
     return new Workload(
         side + "x" + side + " grid, failing " + failing + ": simulate to 1 %",
         Effort.USUAL,
@@ -25,7 +25,7 @@ final class SimulationRows {
         () -> {
           BoundsAtProbabilities bounds =
               Bounds.of(Inputs.grid(side, side).connecting(Inputs.corners(side, side)))
-                  .given(Probabilities.all(Probability.failing(failing)));
+                  .given(Probabilities.all(Probability.failing(Double.parseDouble(failing))));
           Simulation simulation = Simulation.toRelativeError(0.01);
           return new Prepared(
               2L * side * (side - 1),
