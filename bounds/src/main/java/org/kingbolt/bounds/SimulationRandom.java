@@ -31,13 +31,22 @@ final class SimulationRandom {
     d = mix(mixed);
   }
 
+  /** Starts from a state, not all of which is 0. */
+  SimulationRandom(long a, long b, long c, long d) {
+    this.a = a;
+    this.b = b;
+    this.c = c;
+    this.d = d;
+  }
+
   private static long mix(long value) {
     long mixed = (value ^ (value >>> 30)) * 0xBF58476D1CE4E5B9L;
     mixed = (mixed ^ (mixed >>> 27)) * 0x94D049BB133111EBL;
     return mixed ^ (mixed >>> 31);
   }
 
-  private long next() {
+  /** 64 random bits. */
+  long next() {
     long result = Long.rotateLeft(a + d, 23) + a;
     long shifted = b << 17;
     c ^= a;
