@@ -57,32 +57,57 @@ public final class Simulation {
   private static final long USUAL_NODES = 1 << 18;
   private static final Duration LONGEST = Duration.ofDays(36500);
 
-  // written to by the methods that make an object, before anyone else sees it; an error of 0 and a
-  // time of -1 are none
-  private double error;
-  private long samples = UNLIMITED;
-  private long nanos = -1;
-  private double confidence = 0.95;
-  private long seed;
-  private int threads = Runtime.getRuntime().availableProcessors();
-  private Method method = Method.BEST;
-  private Budget budget = Budget.ofNodes(USUAL_NODES);
-  private List<Set<String>> cutSets = List.of();
+  private static final long NO_TIME = -1;
 
-  private Simulation() {}
+  /** 0 where no relative error is asked for. */
+  private final double error;
 
-  private Simulation copy() {
-    Simulation copy = new Simulation();
-    copy.error = error;
-    copy.samples = samples;
-    copy.nanos = nanos;
-    copy.confidence = confidence;
-    copy.seed = seed;
-    copy.threads = threads;
-    copy.method = method;
-    copy.budget = budget;
-    copy.cutSets = cutSets;
-    return copy;
+  private final long samples;
+  private final long nanos;
+  private final double confidence;
+  private final long seed;
+  private final int threads;
+  private final Method method;
+  private final Budget budget;
+  private final List<Set<String>> cutSets;
+
+  /** The settings while they are being changed, by one method. */
+  private static final class Draft {
+    private double error;
+    private long samples = UNLIMITED;
+    private long nanos = NO_TIME;
+    private double confidence = 0.95;
+    private long seed;
+    private int threads = Runtime.getRuntime().availableProcessors();
+    private Method method = Method.BEST;
+    private Budget budget = Budget.ofNodes(USUAL_NODES);
+    private List<Set<String>> cutSets = List.of();
+  }
+
+  private Simulation(Draft draft) {
+    error = draft.error;
+    samples = draft.samples;
+    nanos = draft.nanos;
+    confidence = draft.confidence;
+    seed = draft.seed;
+    threads = draft.threads;
+    method = draft.method;
+    budget = draft.budget;
+    cutSets = draft.cutSets;
+  }
+
+  private Draft draft() {
+    Draft draft = new Draft();
+    draft.error = error;
+    draft.samples = samples;
+    draft.nanos = nanos;
+    draft.confidence = confidence;
+    draft.seed = seed;
+    draft.threads = threads;
+    draft.method = method;
+    draft.budget = budget;
+    draft.cutSets = cutSets;
+    return draft;
   }
 
   /**
@@ -94,7 +119,7 @@ public final class Simulation {
    * @throws IllegalArgumentException if the error is out of range
    */
   public static Simulation toRelativeError(double error) {
-    return new Simulation().withRelativeError(error).withSamples(MOST_FOR_ERROR);
+    return new Simulation(new Draft()).withRelativeError(error).withSamples(MOST_FOR_ERROR);
   }
 
   /**
@@ -105,7 +130,7 @@ public final class Simulation {
    * @throws IllegalArgumentException if there are none
    */
   public static Simulation ofSamples(long samples) {
-    return new Simulation().withSamples(samples);
+    return new Simulation(new Draft()).withSamples(samples);
   }
 
   /**
@@ -116,7 +141,7 @@ public final class Simulation {
    * @throws IllegalArgumentException if the time is zero or negative
    */
   public static Simulation ofTime(Duration time) {
-    return new Simulation().withTime(time);
+    return new Simulation(new Draft()).withTime(time);
   }
 
   /**
@@ -127,9 +152,9 @@ public final class Simulation {
    * @throws IllegalArgumentException if the error is out of range
    */
   public Simulation withRelativeError(double error) {
-    Simulation changed = copy();
+    Draft changed = draft();
     changed.error = checkedError(error);
-    return changed;
+    return new Simulation(changed);
   }
 
   /**
@@ -140,9 +165,9 @@ public final class Simulation {
    * @throws IllegalArgumentException if there are none
    */
   public Simulation withSamples(long samples) {
-    Simulation changed = copy();
+    Draft changed = draft();
     changed.samples = checkedSamples(samples);
-    return changed;
+    return new Simulation(changed);
   }
 
   /**
@@ -155,9 +180,9 @@ public final class Simulation {
    * @throws IllegalArgumentException if the time is zero or negative
    */
   public Simulation withTime(Duration time) {
-    Simulation changed = copy();
+    Draft changed = draft();
     changed.nanos = checkedNanos(time);
-    return changed;
+    return new Simulation(changed);
   }
 
   /**
@@ -174,9 +199,9 @@ public final class Simulation {
               + confidence
               + "; give a number above 0 and below 1, such as 0.95 for 95 percent");
     }
-    Simulation changed = copy();
+    Draft changed = draft();
     changed.confidence = confidence;
-    return changed;
+    return new Simulation(changed);
   }
 
   /**
@@ -186,9 +211,9 @@ public final class Simulation {
    * @return a simulation that differs in this only
    */
   public Simulation withSeed(long seed) {
-    Simulation changed = copy();
+    Draft changed = draft();
     changed.seed = seed;
-    return changed;
+    return new Simulation(changed);
   }
 
   /**
@@ -203,9 +228,9 @@ public final class Simulation {
       throw new IllegalArgumentException(
           threads + " threads; at least 1 is needed, and one for each processor is usual");
     }
-    Simulation changed = copy();
+    Draft changed = draft();
     changed.threads = threads;
-    return changed;
+    return new Simulation(changed);
   }
 
   /**
@@ -215,10 +240,10 @@ public final class Simulation {
    * @return a simulation that differs in this only
    */
   public Simulation withMethod(Method method) {
-    Simulation changed = copy();
+    Draft changed = draft();
     changed.method =
         Objects.requireNonNull(method, "method is null; give one, such as Method.BEST");
-    return changed;
+    return new Simulation(changed);
   }
 
   /**
@@ -229,10 +254,10 @@ public final class Simulation {
    * @return a simulation that differs in this only
    */
   public Simulation withBudget(Budget budget) {
-    Simulation changed = copy();
+    Draft changed = draft();
     changed.budget =
         Objects.requireNonNull(budget, "budget is null; give one, such as Budget.ofHeap()");
-    return changed;
+    return new Simulation(changed);
   }
 
   /**
@@ -254,10 +279,10 @@ public final class Simulation {
     if (sets.isEmpty()) {
       throw new IllegalArgumentException("there are no cut sets; give all minimal ones");
     }
-    Simulation changed = copy();
+    Draft changed = draft();
     changed.method = Method.COVERAGE;
     changed.cutSets = List.copyOf(sets);
-    return changed;
+    return new Simulation(changed);
   }
 
   private static double checkedError(double error) {
