@@ -114,6 +114,29 @@ public final class BoundsAtProbabilities {
   }
 
   /**
+   * A statistical estimate by simulation, with a confidence interval, where no certified interval
+   * is narrow enough; see {@link Simulation.Method} for the methods.
+   *
+   * <p>Holds for independent components. The interval is the exact binomial one of Clopper &amp;
+   * Pearson (1934) for a share of random states, times a factor that is worked out, and how many
+   * states are drawn is decided so that its confidence is kept.
+   *
+   * <p>Example: {@code Bounds.of(grid).given(p).simulate(Simulation.toRelativeError(0.01))}.
+   *
+   * @param simulation when to stop, and how to draw
+   * @return the estimate. Cost: the preparation, within the simulation's own budget, and for every
+   *     sample the structure function once.
+   * @throws IllegalArgumentException if a cut set that the simulation was given is none
+   * @throws org.kingbolt.core.BudgetExceededException if the preparation of the method asked for
+   *     does not fit its budget, or the thread is interrupted
+   */
+  public Estimate simulate(Simulation simulation) {
+    Objects.requireNonNull(
+        simulation, "simulation is null; give one, such as Simulation.toRelativeError(0.01)");
+    return SimulationPlan.run(structure, p, simulation, this::compiled);
+  }
+
+  /**
    * Esary–Proschan bounds within {@link Budget#ofHeap()}.
    *
    * @return the interval; see {@link #esaryProschan(Budget)}

@@ -73,6 +73,17 @@ final class Compilation {
         () -> expression(numbering, composer, meter).between(working, failing, effort, meter));
   }
 
+  /**
+   * The diagram of a structure that works less often, or more often, than this one.
+   *
+   * @param relaxer chooses for the networks
+   */
+  static Diagram oneSidedDiagram(Numbering numbering, NetworkRelaxer relaxer, WorkMeter meter) {
+    Composer composer = new Composer(0);
+    composer.relax(relaxer);
+    return within(() -> expression(numbering, composer, meter).compose(meter));
+  }
+
   static int widestFrontier(Structure structure) {
     WorkMeter meter = WorkMeter.UNLIMITED;
     return expression(new Numbering(structure, meter), meter).composer.widestFrontier();

@@ -2,6 +2,7 @@ package org.kingbolt.core;
 
 import java.util.Arrays;
 import java.util.List;
+import org.kingbolt.core.diagram.Diagram;
 import org.kingbolt.core.diagram.NetworkRelaxer;
 import org.kingbolt.core.diagram.WorkMeter;
 
@@ -155,6 +156,36 @@ public final class Enclosure {
   /** Whether one probability is smaller than another, judged on the side that has more digits. */
   private static boolean isSmaller(double[] a, double[] b) {
     return b[1] < b[0] ? a[1] > b[1] : a[0] < b[0];
+  }
+
+  /**
+   * A diagram that works at most as often as the structure, in no state in which the structure
+   * fails: what has taken its place for the lower end, before further steps.
+   *
+   * @param budget how many nodes the diagram may have, and how long making it may take
+   * @return the diagram; its variables are indices into {@link Structure#components()}
+   * @throws BudgetExceededException if the budget is used up
+   */
+  public Diagram lessWorking(Budget budget) {
+    return diagram(true, budget);
+  }
+
+  /**
+   * A diagram that works at least as often as the structure, in every state in which the structure
+   * does: what has taken its place for the upper end.
+   *
+   * @param budget how many nodes the diagram may have, and how long making it may take
+   * @return the diagram; its variables are indices into {@link Structure#components()}
+   * @throws BudgetExceededException if the budget is used up
+   */
+  public Diagram moreWorking(Budget budget) {
+    return diagram(false, budget);
+  }
+
+  private Diagram diagram(boolean lessWorking, Budget budget) {
+    WorkMeter making =
+        Check.notNull(budget, "budget").start("making the diagram of one side of an interval");
+    return Compilation.oneSidedDiagram(numbering, relaxer.begin(lessWorking), making);
   }
 
   /**

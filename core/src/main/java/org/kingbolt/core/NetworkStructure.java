@@ -8,6 +8,7 @@ import java.util.Map;
 import java.util.Objects;
 import java.util.Optional;
 import java.util.Set;
+import java.util.function.Predicate;
 import org.kingbolt.core.diagram.Composer;
 import org.kingbolt.core.diagram.NetworkPaths;
 import org.kingbolt.core.diagram.NetworkProblem;
@@ -155,6 +156,21 @@ final class NetworkStructure extends Structure {
       opposite[i] = !opposite[i];
     }
     return !problem.works(opposite);
+  }
+
+  @Override
+  Predicate<boolean[]> evaluation() {
+    Predicate<boolean[]> search = problem.search();
+    if (!dual) {
+      return search;
+    }
+    boolean[] opposite = new boolean[parts().size()];
+    return partWorks -> {
+      for (int i = 0; i < opposite.length; i++) {
+        opposite[i] = !partWorks[i];
+      }
+      return !search.test(opposite);
+    };
   }
 
   @Override

@@ -681,6 +681,11 @@ public abstract sealed class Structure implements Serializable
   /** The operator's value, given its parts' values. */
   abstract boolean evaluate(boolean[] partWorks);
 
+  /** The operator's value for very many states; for one thread. */
+  Predicate<boolean[]> evaluation() {
+    return this::evaluate;
+  }
+
   /** The same operator over other parts; parts may be constants, the result is simplified. */
   abstract Structure rebuild(List<Structure> newParts);
 

@@ -1,5 +1,7 @@
 package org.kingbolt.core.diagram;
 
+import java.util.function.Predicate;
+
 /**
  * A network reduced to numbers, as the frontier method reads it: the structure works while every
  * target can be reached from the source over working links and nodes, the source and the targets
@@ -77,8 +79,7 @@ public final class NetworkProblem {
       int node = queue[done];
       for (int link : at[node]) {
         int other = otherEnd(link, node);
-        boolean passable = !arc[link] || from[link] == node;
-        if (passable
+        if (isPassable(link, node)
             && !reached[other]
             && isUp(linkSlot[link], slotWorks)
             && isUp(nodeSlot[other], slotWorks)) {
@@ -93,6 +94,15 @@ public final class NetworkProblem {
       }
     }
     return true;
+  }
+
+  /**
+   * The structure function once more, for very many states.
+   *
+   * @return gives what {@link #works(boolean[])} gives, without allocating anything; for one thread
+   */
+  public Predicate<boolean[]> search() {
+    return new NetworkSearch(this);
   }
 
   private static boolean isUp(int slot, boolean[] slotWorks) {
@@ -132,6 +142,11 @@ public final class NetworkProblem {
       at[to[link]][filled[to[link]]++] = link;
     }
     return at;
+  }
+
+  /** Whether a link at a node can be passed from there. */
+  boolean isPassable(int link, int node) {
+    return !arc[link] || from[link] == node;
   }
 
   int otherEnd(int link, int node) {

@@ -19,7 +19,8 @@ final class Workloads {
             IntervalRows.rows(),
             SetRows.rows(),
             ImportanceRows.rows(),
-            PlanRows.rows())
+            PlanRows.rows(),
+            SimulationRows.rows())
         .flatMap(List::stream)
         .toList();
   }
