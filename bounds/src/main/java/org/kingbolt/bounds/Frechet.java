@@ -1,0 +1,46 @@
+package org.kingbolt.bounds;
+
+import org.kingbolt.core.Budget;
+import org.kingbolt.core.Probability;
+import org.kingbolt.core.diagram.WorkMeter;
+
+/** Fréchet bounds: a path fails only if a member does, a cut holds only if a member works. */
+final class Frechet {
+
+  private Frechet() {}
+
+  static Interval of(Families families, Budget budget, Effort effort) {
+    WorkMeter meter = budget.start("searching the best path and the worst cut");
+    effort.add(2);
+    Probability fails = notAnyAbove(families, true, meter);
+    Probability works = notAnyAbove(families, false, meter);
+    return new Interval(
+        fails.complement(),
+        works,
+        Assumption.NONE,
+        "Frechet",
+        "whatever the dependence, the system fails at most as often as the members of its best path"
+            + " do in sum, and works at most as often as the members of its worst cut do in sum"
+            + trivial(fails, "; lower end")
+            + trivial(works, "; upper end"));
+  }
+
+  private static String trivial(Probability most, String end) {
+    return most.working() == 1 ? end + " trivial, since no such sum is below 1" : "";
+  }
+
+  /**
+   * No smaller than the probability that no set of a family occurs: the least sum of the
+   * probabilities that a member of a set does not, or 1 where that is not below 1.
+   */
+  static Probability notAnyAbove(Families families, boolean paths, WorkMeter meter) {
+    double[] fails = families.values.fails(paths);
+    int[] set = families.lightest(paths, fails, meter);
+    double sum = 0;
+    for (int member : set) {
+      sum += fails[member];
+    }
+    double error = sum * Rounding.share(set.length + families.values.slack());
+    return set.length > 0 && sum + error < 1 ? Rounding.above(sum, error) : Probability.CERTAIN;
+  }
+}
