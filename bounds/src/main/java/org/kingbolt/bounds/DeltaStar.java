@@ -69,11 +69,10 @@ final class DeltaStar {
       work.meter.now(work.graph.nodes());
       if (!work.replaceBest()) {
         throw new IllegalArgumentException(
-            "the network comes apart no further by series, parallel, delta-star and star-delta"
-                + " replacement: "
-                + work.graph.nodes()
-                + " nodes were met and every one left has four links or more, or a star without a"
-                + " delta of its own; use within(budget), which holds for every network");
+            "the network does not come apart: after "
+                + work.replacements
+                + " replacements no delta or star is left whose replacement would take away links"
+                + " or nodes; use within(budget), which holds for every network");
       }
       work.replacements++;
       work.graph.reduce();
