@@ -141,12 +141,14 @@ public final class BoundsAtProbabilities {
    * probabilities do not give.) Tight where the system is highly reliable or hardly reliable at
    * all; attained by series and parallel systems.
    *
+   * <p>Where one family is too large for the budget its end is trivial, and the reason says so.
+   *
    * <p>Source: Esary &amp; Proschan, Coherent structures of non-identical components, Technometrics
    * 5 (1963) 191.
    *
-   * @param budget how much work it may cost; every minimal set counts as a node
+   * @param budget how much work each family may cost; every minimal set counts as a node
    * @return the interval. Cost: linear in the total size of all minimal path and cut sets.
-   * @throws org.kingbolt.core.BudgetExceededException if the budget is used up
+   * @throws org.kingbolt.core.BudgetExceededException if the budget is used up by both families
    */
   public Interval esaryProschan(Budget budget) {
     return EsaryProschan.of(families(budget), budget, new Effort());
@@ -179,7 +181,7 @@ public final class BoundsAtProbabilities {
    */
   public Interval modular(Budget budget) {
     requireBudget(budget);
-    return Modular.of(structure, values, budget, new Effort());
+    return Modular.of(structure, values, () -> families(budget), budget, new Effort());
   }
 
   /**
@@ -393,6 +395,7 @@ public final class BoundsAtProbabilities {
    */
   public BoundsTable all(Budget budget) {
     requireBudget(budget);
+    Supplier<Families> compiled = compiledOnce(budget);
     List<BoundsTable.Method> methods = new ArrayList<>();
     methods.add(
         new BoundsTable.Method(
@@ -407,9 +410,9 @@ public final class BoundsAtProbabilities {
                     })));
     methods.add(
         new BoundsTable.Method(
-            "Esary-Proschan by modules",
-            (given, effort) -> Modular.of(structure, values, given, effort)));
-    methods.addAll(Closed.methods(compiledOnce(budget)));
+            Modular.NAME,
+            (given, effort) -> Modular.of(structure, values, compiled, given, effort)));
+    methods.addAll(Closed.methods(compiled));
     return BoundsTable.of(methods, budget);
   }
 

@@ -1,5 +1,6 @@
 package org.kingbolt.bounds;
 
+import java.math.BigInteger;
 import java.util.Arrays;
 import java.util.HashMap;
 import java.util.Map;
@@ -12,11 +13,12 @@ import org.kingbolt.core.MinimalSets;
 import org.kingbolt.core.diagram.Diagram;
 import org.kingbolt.core.diagram.WorkMeter;
 
-/** The minimal path and cut sets of a compiled system, all of them. */
+/** The minimal path and cut sets of a compiled system, all of them. For one thread. */
 final class CompiledFamilies extends Families {
 
   private final CoherentSystem system;
   private final Budget budget;
+  private final Map<Boolean, MinimalSets> known = new HashMap<>();
   private final Map<String, Integer> index = new HashMap<>();
 
   /** Probabilities in the order of the system's components. */
@@ -31,7 +33,13 @@ final class CompiledFamilies extends Families {
 
   @Override
   void forEach(boolean paths, WorkMeter meter, Consumer<int[]> action) {
-    MinimalSets sets = paths ? system.minimalPathSets(budget) : system.minimalCutSets(budget);
+    MinimalSets sets = known.get(paths);
+    if (sets == null) {
+      sets = paths ? system.minimalPathSets(budget) : system.minimalCutSets(budget);
+      known.put(paths, sets);
+    }
+    // too many to go through are told at once
+    meter.now(sets.count().min(BigInteger.valueOf(Long.MAX_VALUE)).longValueExact());
     for (Set<String> set : sets) {
       int[] members = new int[set.size()];
       int count = 0;

@@ -16,23 +16,29 @@ final class EsaryProschan {
   private EsaryProschan() {}
 
   static Interval of(Families families, Budget budget, Effort effort) {
-    return new Interval(
-        lower(families, budget, effort),
-        upper(families, budget, effort),
-        Assumption.INDEPENDENT,
+    return TwoSided.of(
         NAME,
-        REASON + cutOff(families, false, "; lower end") + cutOff(families, true, "; upper end"));
+        Assumption.INDEPENDENT,
+        REASON,
+        paths -> {
+          SetProduct product = combined(families, paths, budget, effort);
+          return new UnionBounds(
+              Probability.IMPOSSIBLE,
+              Rounding.up(
+                  product.any(), product.none(), product.operations() + families.values.slack()),
+              "which say nothing of this end",
+              "as if they shared nothing" + cutOff(families, paths));
+        });
   }
 
-  private static String cutOff(Families families, boolean paths, String end) {
+  private static String cutOff(Families families, boolean paths) {
     double discarded = families.discarded(paths);
     if (discarded == 0) {
       return "";
     }
-    return end
-        + (discarded < 1
-            ? " with the probability discarded as one more set"
-            : " trivial, since the family is cut off");
+    return discarded < 1
+        ? ", with the probability discarded as one more set"
+        : ": trivial, since the family is cut off";
   }
 
   static Probability lower(Families families, Budget budget, Effort effort) {

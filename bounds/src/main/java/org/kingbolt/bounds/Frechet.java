@@ -36,11 +36,21 @@ final class Frechet {
   static Probability notAnyAbove(Families families, boolean paths, WorkMeter meter) {
     double[] fails = families.values.fails(paths);
     int[] set = families.lightest(paths, fails, meter);
+    if (set.length == 0) {
+      return Probability.CERTAIN;
+    }
+    int largest = set[0];
     double sum = 0;
     for (int member : set) {
       sum += fails[member];
+      largest = fails[member] > fails[largest] ? member : largest;
     }
-    double error = sum * Rounding.share(set.length + families.values.slack());
-    return set.length > 0 && sum + error < 1 ? Rounding.above(sum, error) : Probability.CERTAIN;
+    double others = 0;
+    for (int member : set) {
+      others += member == largest ? 0 : fails[member];
+    }
+    double share = Rounding.share(set.length + families.values.slack());
+    double occurs = families.values.occurs(paths)[largest];
+    return Rounding.above(sum, sum * share, occurs - others, occurs * share);
   }
 }

@@ -37,7 +37,7 @@ final class TwoSided {
     Probability lowerByCuts = cuts.upper().complement();
     Probability upperByCuts = cuts.lower().complement();
     boolean lowerIsOfCuts = lowerByCuts.compareTo(paths.lower()) >= 0;
-    boolean upperIsOfCuts = upperByCuts.compareTo(paths.upper()) <= 0;
+    boolean upperIsOfCuts = upperByCuts.compareTo(paths.upper()) < 0;
     return new Interval(
         lowerIsOfCuts ? lowerByCuts : paths.lower(),
         upperIsOfCuts ? upperByCuts : paths.upper(),

@@ -180,7 +180,7 @@ class DependenceTest {
     Interval interval = Bounds.of(sample.structure()).given(p).linearProgramming();
     assertEquals(extreme(sample.oracle(), p, GoalType.MINIMIZE), interval.lower().working(), 1e-7);
     assertEquals(extreme(sample.oracle(), p, GoalType.MAXIMIZE), interval.upper().working(), 1e-7);
-    assertTrue(interval.reason().indexOf("not proven") < 0, interval::reason);
+    assertTrue(!interval.reason().contains("not proven"), interval::reason);
   }
 
   private static double extreme(Oracle oracle, Probabilities p, GoalType goal) {
