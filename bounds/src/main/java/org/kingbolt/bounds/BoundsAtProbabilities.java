@@ -4,7 +4,6 @@ import java.util.ArrayList;
 import java.util.List;
 import java.util.Objects;
 import java.util.function.Predicate;
-import java.util.function.Supplier;
 import org.jspecify.annotations.Nullable;
 import org.kingbolt.core.Budget;
 import org.kingbolt.core.BudgetExceededException;
@@ -57,6 +56,24 @@ public final class BoundsAtProbabilities {
       system = known;
     }
     return new CompiledFamilies(known, values, budget);
+  }
+
+  /**
+   * For bounds from single sets, which need no diagram: what is too large has sets all the same.
+   */
+  private Families someFamilies(Budget budget) {
+    try {
+      return families(budget);
+    } catch (BudgetExceededException over) {
+      return found(over);
+    }
+  }
+
+  private Families found(BudgetExceededException over) {
+    if (over.limit() == BudgetExceededException.Limit.INTERRUPT) {
+      throw over;
+    }
+    return new FoundFamilies(structure, values, over);
   }
 
   /** The most that a method of the table is given when the caller says nothing. */
@@ -188,7 +205,7 @@ public final class BoundsAtProbabilities {
    * Min–max bounds within {@link Budget#ofHeap()}.
    *
    * @return the interval; see {@link #minMax(Budget)}
-   * @throws org.kingbolt.core.BudgetExceededException if the diagram grows too large
+   * @throws org.kingbolt.core.BudgetExceededException if the thread is interrupted
    */
   public Interval minMax() {
     return minMax(Budget.ofHeap());
@@ -206,18 +223,20 @@ public final class BoundsAtProbabilities {
    * 2.
    *
    * @param budget how much work it may cost
-   * @return the interval. Cost: two scans of the diagram; no set is listed but the best.
+   * @return the interval. Cost: two scans of the diagram; no set is listed but the best. What
+   *     cannot be compiled within the budget is given the same budget again to find some path and
+   *     some cut instead, with which the interval holds, but is wider.
    * @throws org.kingbolt.core.BudgetExceededException if the budget is used up
    */
   public Interval minMax(Budget budget) {
-    return MinMax.of(families(budget), budget, new Effort());
+    return MinMax.of(someFamilies(budget), budget, new Effort());
   }
 
   /**
    * Fréchet bounds within {@link Budget#ofHeap()}.
    *
    * @return the interval; see {@link #frechet(Budget)}
-   * @throws org.kingbolt.core.BudgetExceededException if the diagram grows too large
+   * @throws org.kingbolt.core.BudgetExceededException if the thread is interrupted
    */
   public Interval frechet() {
     return frechet(Budget.ofHeap());
@@ -234,11 +253,13 @@ public final class BoundsAtProbabilities {
    * 379 (from memory).
    *
    * @param budget how much work it may cost
-   * @return the interval. Cost: two scans of the diagram.
+   * @return the interval. Cost: two scans of the diagram. What cannot be compiled within the budget
+   *     is given the same budget again to find some path and some cut instead, with which the
+   *     interval holds, but is wider.
    * @throws org.kingbolt.core.BudgetExceededException if the budget is used up
    */
   public Interval frechet(Budget budget) {
-    return Frechet.of(families(budget), budget, new Effort());
+    return Frechet.of(someFamilies(budget), budget, new Effort());
   }
 
   /**
@@ -395,7 +416,8 @@ public final class BoundsAtProbabilities {
    */
   public BoundsTable all(Budget budget) {
     requireBudget(budget);
-    Supplier<Families> compiled = compiledOnce(budget);
+    // what cannot be compiled is not tried again by every method
+    Families some = someFamilies(budget);
     List<BoundsTable.Method> methods = new ArrayList<>();
     methods.add(
         new BoundsTable.Method(
@@ -411,24 +433,9 @@ public final class BoundsAtProbabilities {
     methods.add(
         new BoundsTable.Method(
             Modular.NAME,
-            (given, effort) -> Modular.of(structure, values, compiled, given, effort)));
-    methods.addAll(Closed.methods(compiled));
+            (given, effort) -> Modular.of(structure, values, () -> some, given, effort)));
+    methods.addAll(Closed.methods(some));
     return BoundsTable.of(methods, budget);
-  }
-
-  /** What cannot be compiled is not tried again by every method. */
-  private Supplier<Families> compiledOnce(Budget budget) {
-    try {
-      Families families = families(budget);
-      return () -> families;
-    } catch (BudgetExceededException over) {
-      if (over.limit() == BudgetExceededException.Limit.INTERRUPT) {
-        throw over;
-      }
-      return () -> {
-        throw over;
-      };
-    }
   }
 
   static void requireBudget(Budget budget) {

@@ -2,7 +2,6 @@ package org.kingbolt.bounds;
 
 import java.util.ArrayList;
 import java.util.List;
-import java.util.function.Supplier;
 import org.kingbolt.core.Budget;
 
 /** The methods that need the families of path and cut sets and nothing else. */
@@ -37,30 +36,26 @@ final class Closed {
         paths -> SecondOrder.of(families, paths, budget, effort));
   }
 
-  static List<BoundsTable.Method> methods(Supplier<Families> families) {
+  static List<BoundsTable.Method> methods(Families families) {
     List<BoundsTable.Method> methods = new ArrayList<>();
     methods.add(
         new BoundsTable.Method(
-            "Frechet", (budget, effort) -> Frechet.of(families.get(), budget, effort)));
+            "Frechet", (budget, effort) -> Frechet.of(families, budget, effort)));
     methods.add(
         new BoundsTable.Method(
-            "linear programming",
-            (budget, effort) -> LinearProgram.of(families.get(), budget, effort)));
+            "linear programming", (budget, effort) -> LinearProgram.of(families, budget, effort)));
+    methods.add(
+        new BoundsTable.Method("min-max", (budget, effort) -> MinMax.of(families, budget, effort)));
     methods.add(
         new BoundsTable.Method(
-            "min-max", (budget, effort) -> MinMax.of(families.get(), budget, effort)));
-    methods.add(
-        new BoundsTable.Method(
-            EsaryProschan.NAME,
-            (budget, effort) -> EsaryProschan.of(families.get(), budget, effort)));
+            EsaryProschan.NAME, (budget, effort) -> EsaryProschan.of(families, budget, effort)));
     methods.add(
         new BoundsTable.Method(
             "inclusion-exclusion of order " + ORDER_OF_TABLE,
-            (budget, effort) ->
-                inclusionExclusion(ORDER_OF_TABLE, families.get(), budget, effort)));
+            (budget, effort) -> inclusionExclusion(ORDER_OF_TABLE, families, budget, effort)));
     methods.add(
         new BoundsTable.Method(
-            "second order", (budget, effort) -> secondOrder(families.get(), budget, effort)));
+            "second order", (budget, effort) -> secondOrder(families, budget, effort)));
     return methods;
   }
 }

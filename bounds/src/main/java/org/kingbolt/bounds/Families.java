@@ -22,12 +22,16 @@ abstract class Families {
   abstract void forEach(boolean paths, WorkMeter meter, Consumer<int[]> action);
 
   /**
-   * A set with the least sum of its members' weights.
+   * A set with the least sum of its members' weights; of a structure that could not be compiled,
+   * any set.
    *
    * @param weights one for every component, at least 0
    * @return the members; empty if no set is known
    */
   abstract int[] lightest(boolean paths, double[] weights, WorkMeter meter);
+
+  /** Throws what kept the structure from being compiled, if anything did. */
+  void requireLightest() {}
 
   /** No smaller than the probability that any set that is not handed over occurs; 1 if unknown. */
   abstract double discarded(boolean paths);

@@ -26,7 +26,7 @@ final class Frechet {
   }
 
   private static String trivial(Probability most, String end) {
-    return most.working() == 1 ? end + " trivial, since no such sum is below 1" : "";
+    return most.equals(Probability.CERTAIN) ? end + " trivial, since no such sum is below 1" : "";
   }
 
   /**

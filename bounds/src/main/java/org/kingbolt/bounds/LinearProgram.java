@@ -68,6 +68,7 @@ final class LinearProgram {
   }
 
   static Interval of(Families families, Budget budget, Effort effort) {
+    families.requireLightest();
     LinearProgram failing = solved(families, false, budget, effort);
     LinearProgram working = solved(families, true, budget, effort);
     return new Interval(

@@ -49,15 +49,16 @@ final class Rounding {
     return Probability.of(more, Math.max(0, Math.nextDown(1 - more)));
   }
 
-  /** An upper end on the working side, from both sides, each with its error; 1 if above. */
+  /** An upper end, from both sides, each with its error; 1 if above. The smaller side decides. */
   static Probability above(
       double working, double workingError, double failing, double failingError) {
     double less = Math.nextDown(failing - failingError);
-    double more = Math.nextUp(working + workingError);
-    if (working == 0) {
-      return Probability.IMPOSSIBLE;
+    if (less <= 0) {
+      return Probability.CERTAIN;
     }
-    return less <= 0 ? Probability.CERTAIN : Probability.of(Math.min(1, more), Math.min(1, less));
+    return less < 0.5
+        ? Probability.of(Math.min(1, Math.nextUp(1 - less)), less)
+        : above(working, workingError);
   }
 
   /** A share of a value that its rounding in so many operations does not exceed. */

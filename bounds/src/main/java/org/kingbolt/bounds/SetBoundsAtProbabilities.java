@@ -188,7 +188,7 @@ public final class SetBoundsAtProbabilities {
    */
   public BoundsTable all(Budget budget) {
     BoundsAtProbabilities.requireBudget(budget);
-    return BoundsTable.of(Closed.methods(() -> families), budget);
+    return BoundsTable.of(Closed.methods(families), budget);
   }
 
   /**

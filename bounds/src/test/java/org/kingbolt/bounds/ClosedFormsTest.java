@@ -188,6 +188,31 @@ class ClosedFormsTest {
     assertEquals(BudgetExceededException.Limit.NODES, none.limit());
   }
 
+  /** Slack for rounding grows with the components, and must not take the sides apart. */
+  @Test
+  void largeSystems_haveEndsWhoseSidesAddUp() {
+    String[] names = new String[20_000];
+    for (int i = 0; i < names.length; i++) {
+      names[i] = "c" + i;
+    }
+    Probabilities p = Probabilities.all(Probability.failing(2e-5));
+    BoundsAtProbabilities bounds = Bounds.of(Structure.series(names)).given(p);
+    Probability exact = Structure.series(names).reliability(p);
+    for (Interval interval :
+        List.of(
+            bounds.frechet(),
+            bounds.minMax(),
+            bounds.modular(),
+            bounds.inclusionExclusion(1),
+            bounds.esaryProschan())) {
+      for (Probability end : List.of(interval.lower(), interval.upper())) {
+        assertEquals(1, end.working() + end.failing(), 1e-14, interval::toString);
+      }
+      assertTrue(interval.contains(exact), interval::toString);
+    }
+    assertEquals(0.4, bounds.frechet().lower().failing(), 1e-9);
+  }
+
   @Test
   void interrupts_areHeeded() {
     BoundsAtProbabilities bounds =

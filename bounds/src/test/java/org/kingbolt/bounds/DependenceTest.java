@@ -1,6 +1,7 @@
 package org.kingbolt.bounds;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
+import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 import static org.kingbolt.bounds.Holds.assertHolds;
 
@@ -25,6 +26,8 @@ import org.apache.commons.math3.optim.linear.Relationship;
 import org.apache.commons.math3.optim.linear.SimplexSolver;
 import org.apache.commons.math3.optim.nonlinear.scalar.GoalType;
 import org.junit.jupiter.api.Test;
+import org.kingbolt.core.Budget;
+import org.kingbolt.core.BudgetExceededException;
 import org.kingbolt.core.Probabilities;
 import org.kingbolt.core.Probability;
 import org.kingbolt.core.Structure;
@@ -209,6 +212,33 @@ class DependenceTest {
             goal,
             new NonNegativeConstraint(true))
         .getValue();
+  }
+
+  /** As for structures that cannot be compiled: any minimal path and cut do, if not as well. */
+  @Property(tries = 500)
+  void setsFoundWithoutADiagram_areMinimal_andGiveWiderIntervals(
+      @ForAll("structures") Sample sample, @ForAll("probabilities") Probabilities p) {
+    BudgetExceededException over =
+        assertThrows(BudgetExceededException.class, () -> Budget.ofNodes(1).start("testing").at(2));
+    List<String> names = sample.structure().components();
+    Families found =
+        new FoundFamilies(
+            sample.structure(), new ComponentValues(names, p.forComponents(names)), over);
+    for (boolean paths : new boolean[] {true, false}) {
+      java.util.Set<String> set = new java.util.HashSet<>();
+      for (int i : found.mostProbable(paths, Budget.ofHeap().start("searching"))) {
+        set.add(names.get(i));
+      }
+      Oracle oracle = sample.oracle();
+      assertTrue((paths ? oracle.minimalPaths() : oracle.minimalCuts()).contains(set));
+    }
+    BoundsAtProbabilities bounds = Bounds.of(sample.structure()).given(p);
+    Interval minMax = MinMax.of(found, Budget.ofHeap(), new Effort());
+    Interval frechet = Frechet.of(found, Budget.ofHeap(), new Effort());
+    assertHolds(sample.oracle(), p, minMax);
+    assertHolds(sample.oracle(), p, frechet);
+    Holds.assertWithin(bounds.minMax(), minMax);
+    Holds.assertWithin(bounds.frechet(), frechet);
   }
 
   /** Independent components are associated, and depend in one way of all. */
