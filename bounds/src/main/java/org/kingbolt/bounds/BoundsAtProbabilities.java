@@ -1,12 +1,9 @@
 package org.kingbolt.bounds;
 
-import java.util.ArrayList;
-import java.util.List;
 import java.util.Objects;
 import java.util.function.Predicate;
 import org.jspecify.annotations.Nullable;
 import org.kingbolt.core.Budget;
-import org.kingbolt.core.BudgetExceededException;
 import org.kingbolt.core.CoherentSystem;
 import org.kingbolt.core.Probabilities;
 import org.kingbolt.core.Structure;
@@ -18,67 +15,30 @@ import org.kingbolt.core.Structure;
  * outwards, so that an end at 1e-18 keeps its digits and rounding never takes the exact figure out
  * of the interval.
  *
- * <p>Which contains which: the interval by modules lies within the Esary–Proschan interval (Bodin,
- * 1970); the min–max interval and the linear-programming interval both lie within the Fréchet
- * interval; the second-order interval lies within that of inclusion and exclusion of order 2.
- * Min–max and Esary–Proschan: neither always contains the other. Where every cut has two members or
- * more and components are good enough, Esary–Proschan is the tighter one from below; where
- * components are bad enough and the cuts are more than the members of the smallest path, min–max
- * is; from above the same holds with paths and cuts exchanged (Barlow &amp; Proschan 1975, ch. 2).
- * A series system attains the lower ends of both, a parallel system the upper ends.
+ * <p>Which contains which: by modules lies within Esary–Proschan (Bodin 1970); min–max and linear
+ * programming lie within Fréchet; second order lies within inclusion–exclusion of order 2. Of
+ * min–max and Esary–Proschan neither always contains the other: from below, Esary–Proschan is
+ * tighter where every cut has two members or more and components are good enough, min–max where the
+ * cuts are more than the members of the smallest path and components are bad enough; from above the
+ * same with paths and cuts exchanged (Barlow &amp; Proschan 1975, ch. 2). A series system attains
+ * the lower ends of both, a parallel system the upper ends.
  *
  * <p>Immutable; safe to share between threads.
  */
 public final class BoundsAtProbabilities {
 
-  private static final long NODES_OF_TABLE = 1_000_000;
-
   private final Structure structure;
   private final Probabilities p;
   private final ComponentValues values;
 
-  /** Compiled when first needed; two threads may both do it. */
-  private volatile @Nullable CoherentSystem system;
+  private final SystemFamilies families;
 
   BoundsAtProbabilities(Structure structure, @Nullable CoherentSystem system, Probabilities p) {
     this.structure = structure;
-    this.system = system;
     this.p = p;
     this.values =
         new ComponentValues(structure.components(), p.forComponents(structure.components()));
-  }
-
-  private Families families(Budget budget) {
-    requireBudget(budget);
-    CoherentSystem known = system;
-    if (known == null) {
-      known = structure.compile(budget);
-      system = known;
-    }
-    return new CompiledFamilies(known, values, budget);
-  }
-
-  /**
-   * For bounds from single sets, which need no diagram: what is too large has sets all the same.
-   */
-  private Families someFamilies(Budget budget) {
-    try {
-      return families(budget);
-    } catch (BudgetExceededException over) {
-      return found(over);
-    }
-  }
-
-  private Families found(BudgetExceededException over) {
-    if (over.limit() == BudgetExceededException.Limit.INTERRUPT) {
-      throw over;
-    }
-    return new FoundFamilies(structure, values, over);
-  }
-
-  /** The most that a method of the table is given when the caller says nothing. */
-  private static Budget ofTable() {
-    return Budget.ofNodes(Math.min(NODES_OF_TABLE, Budget.ofHeap().nodes()));
+    this.families = new SystemFamilies(structure, system, values);
   }
 
   /**
@@ -168,7 +128,7 @@ public final class BoundsAtProbabilities {
    * @throws org.kingbolt.core.BudgetExceededException if the budget is used up by both families
    */
   public Interval esaryProschan(Budget budget) {
-    return EsaryProschan.of(families(budget), budget, new Effort());
+    return EsaryProschan.of(families.all(budget), budget, new Effort());
   }
 
   /**
@@ -198,7 +158,7 @@ public final class BoundsAtProbabilities {
    */
   public Interval modular(Budget budget) {
     requireBudget(budget);
-    return Modular.of(structure, values, () -> families(budget), budget, new Effort());
+    return Modular.of(structure, values, () -> families.all(budget), budget, new Effort());
   }
 
   /**
@@ -229,7 +189,7 @@ public final class BoundsAtProbabilities {
    * @throws org.kingbolt.core.BudgetExceededException if the budget is used up
    */
   public Interval minMax(Budget budget) {
-    return MinMax.of(someFamilies(budget), budget, new Effort());
+    return MinMax.of(families.some(budget), budget, new Effort());
   }
 
   /**
@@ -259,7 +219,7 @@ public final class BoundsAtProbabilities {
    * @throws org.kingbolt.core.BudgetExceededException if the budget is used up
    */
   public Interval frechet(Budget budget) {
-    return Frechet.of(someFamilies(budget), budget, new Effort());
+    return Frechet.of(families.some(budget), budget, new Effort());
   }
 
   /**
@@ -276,13 +236,10 @@ public final class BoundsAtProbabilities {
    * The best possible bounds whatever the dependence: the least and the most reliability of any
    * joint distribution in which each component has its own probability, as a linear program.
    *
-   * <p>Of the 2^n states only those count in which the members of one minimal cut set have failed
-   * and all else works (or the members of one minimal path set work and nothing else does), and of
-   * these only as many are looked at as the solution needs; so the number of components is not
-   * limited, but larger programs take long, and systems of more than a few dozen components should
-   * be given a budget of time. The solver's prices are checked against every set and scaled until
-   * they cover it, so that the interval holds however imprecise the solver is; the reason says
-   * whether both ends are attained, to 1e-9 of themselves.
+   * <p>Of the 2^n states only those count in which one minimal set has failed, or works, and
+   * nothing else, and of these as many as the solution needs; so the number of components is not
+   * limited, but more than a few dozen should be given a budget of time. The interval holds however
+   * imprecise the solver is; the reason says whether both ends are attained, to 1e-9 of themselves.
    *
    * <p>Source: Hailperin, Best possible inequalities for the probability of a logical function of
    * events, Amer. Math. Monthly 72 (1965) 343 (from memory).
@@ -293,7 +250,7 @@ public final class BoundsAtProbabilities {
    *     #frechet(Budget)} costs less
    */
   public Interval linearProgramming(Budget budget) {
-    return LinearProgram.of(families(budget), budget, new Effort());
+    return LinearProgram.of(families.all(budget), budget, new Effort());
   }
 
   /**
@@ -329,7 +286,7 @@ public final class BoundsAtProbabilities {
    * @throws org.kingbolt.core.BudgetExceededException if the budget is used up by both families
    */
   public Interval inclusionExclusion(int order, Budget budget) {
-    return Closed.inclusionExclusion(order, families(budget), budget, new Effort());
+    return Closed.inclusionExclusion(order, families.all(budget), budget, new Effort());
   }
 
   /**
@@ -359,7 +316,7 @@ public final class BoundsAtProbabilities {
    * @throws org.kingbolt.core.BudgetExceededException if the budget is used up by both families
    */
   public Interval secondOrder(Budget budget) {
-    return Closed.secondOrder(families(budget), budget, new Effort());
+    return Closed.secondOrder(families.all(budget), budget, new Effort());
   }
 
   /**
@@ -403,7 +360,7 @@ public final class BoundsAtProbabilities {
    * @throws org.kingbolt.core.BudgetExceededException if the thread is interrupted
    */
   public BoundsTable all() {
-    return all(ofTable());
+    return all(BoundsTable.usualBudget());
   }
 
   /**
@@ -416,26 +373,16 @@ public final class BoundsAtProbabilities {
    */
   public BoundsTable all(Budget budget) {
     requireBudget(budget);
-    // what cannot be compiled is not tried again by every method
-    Families some = someFamilies(budget);
-    List<BoundsTable.Method> methods = new ArrayList<>();
-    methods.add(
-        new BoundsTable.Method(
-            "certified",
-            (given, effort) ->
-                within(
-                    given,
-                    0,
-                    interval -> {
-                      effort.add(1);
-                      return true;
-                    })));
-    methods.add(
-        new BoundsTable.Method(
-            Modular.NAME,
-            (given, effort) -> Modular.of(structure, values, () -> some, given, effort)));
-    methods.addAll(Closed.methods(some));
-    return BoundsTable.of(methods, budget);
+    return families.table(
+        budget,
+        (given, effort) ->
+            within(
+                given,
+                0,
+                interval -> {
+                  effort.add(1);
+                  return true;
+                }));
   }
 
   static void requireBudget(Budget budget) {

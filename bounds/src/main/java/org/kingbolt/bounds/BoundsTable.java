@@ -38,12 +38,19 @@ public final class BoundsTable implements Iterable<BoundsTable.Row> {
   /** A method to be run. */
   record Method(String name, BiFunction<Budget, Effort, Interval> run) {}
 
+  private static final long USUAL_NODES = 1_000_000;
+
   private final List<Row> rows;
   private final List<LeftOut> leftOut;
 
   private BoundsTable(List<Row> rows, List<LeftOut> leftOut) {
     this.rows = List.copyOf(rows);
     this.leftOut = List.copyOf(leftOut);
+  }
+
+  /** What every method is given when the caller says nothing. */
+  static Budget usualBudget() {
+    return Budget.ofNodes(Math.min(USUAL_NODES, Budget.ofHeap().nodes()));
   }
 
   static BoundsTable of(List<Method> methods, Budget budget) {

@@ -214,6 +214,34 @@ class DependenceTest {
         .getValue();
   }
 
+  /**
+   * Ford and Fulkerson, Canad. J. Math. 8 (1956) 399 (from memory): as many paths as the smallest
+   * cut has links, so that between two terminals no bound is better than Fréchet's.
+   */
+  @Property(tries = 200)
+  void twoTerminalNetworks_attainTheBoundsOfFrechet(@ForAll("seeds") long seed) {
+    Random random = new Random(seed);
+    org.kingbolt.core.NetworkBuilder network = Structure.network();
+    Probabilities p = Probabilities.all(0.5);
+    int nodes = 3 + random.nextInt(4);
+    for (int node = 1; node < nodes; node++) {
+      network = network.link("tree" + node, "" + node, "" + random.nextInt(node));
+      p = p.with("tree" + node, random.nextDouble());
+    }
+    for (int i = 0; i < 6; i++) {
+      int from = random.nextInt(nodes);
+      int to = (from + 1 + random.nextInt(nodes - 1)) % nodes;
+      network = network.link("link" + i, "" + from, "" + to);
+      p = p.with("link" + i, random.nextDouble());
+    }
+    BoundsAtProbabilities bounds = Bounds.of(network.connecting("0", "" + (nodes - 1))).given(p);
+    Interval frechet = bounds.frechet();
+    Interval best = bounds.linearProgramming();
+    assertEquals(frechet.lower().working(), best.lower().working(), 1e-12);
+    assertEquals(frechet.upper().working(), best.upper().working(), 1e-12);
+    assertTrue(!best.reason().contains("not proven"), best::reason);
+  }
+
   /** As for structures that cannot be compiled: any minimal path and cut do, if not as well. */
   @Property(tries = 500)
   void setsFoundWithoutADiagram_areMinimal_andGiveWiderIntervals(
