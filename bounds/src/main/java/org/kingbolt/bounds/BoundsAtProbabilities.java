@@ -300,13 +300,12 @@ public final class BoundsAtProbabilities {
   }
 
   /**
-   * The best bounds from pairs of minimal sets: any set occurs at most as often as all of them in
-   * sum less the pairs along the best tree, and at least as often as {@code 2/(k+1)} times the sum
-   * less {@code 2/(k(k+1))} times all pairs, for the best k. Over cut sets and over path sets, of
-   * which the better end is taken; where one family is too large the other stands alone. The bound
-   * of Kounias (1968) from above is that of a tree that is a star, and so never better.
-   *
-   * <p>Holds for independent components.
+   * The best bounds from pairs of minimal sets, for independent components: any set occurs at most
+   * as often as all of them in sum less the pairs along the best tree, and at least as often as
+   * {@code 2/(k+1)} times the sum less {@code 2/(k(k+1))} times all pairs, for the best k. Over cut
+   * sets and over path sets, of which the better end is taken; where one family is too large the
+   * other stands alone. The bound of Kounias (1968) from above is that of a tree that is a star,
+   * and so never better.
    *
    * <p>Sources: Hunter, J. Appl. Probab. 13 (1976) 597; Worsley, Biometrika 69 (1982) 297; Dawson
    * &amp; Sankoff, Proc. Amer. Math. Soc. 18 (1967) 504 (from memory).
@@ -330,13 +329,11 @@ public final class BoundsAtProbabilities {
   }
 
   /**
-   * The old hand method for networks: series and parallel links are joined, three links in a delta
-   * are replaced by a star that joins every two of its corners equally often, and stars by deltas,
-   * until one link is left. The result is approximate: a delta and its star differ in how often all
-   * three corners are joined. Kept because reviewers still meet it; the certified interval stands
-   * beside it.
-   *
-   * <p>For independent components.
+   * The old hand method for networks of independent links: series and parallel links are joined,
+   * three links in a delta are replaced by a star that joins every two of its corners equally
+   * often, and stars by deltas, until one link is left. The result is approximate: a delta and its
+   * star differ in how often all three corners are joined. Kept because reviewers still meet it;
+   * the certified interval stands beside it.
    *
    * <p>Source: Gadani, System effectiveness evaluation using star and delta transformations, IEEE
    * Trans. Reliab. 30 (1981) 43 (from memory).
@@ -398,7 +395,6 @@ public final class BoundsAtProbabilities {
   public String toString() {
     return "Bounds["
         + values.size()
-        + " components] at given probabilities; call all(), within(budget), esaryProschan() or"
-        + " minMax()";
+        + " components] at given probabilities; call all() or within(budget)";
   }
 }

@@ -5,6 +5,7 @@ import java.util.Arrays;
 import java.util.HashMap;
 import java.util.Map;
 import java.util.Objects;
+import java.util.Optional;
 import java.util.Set;
 import java.util.function.Consumer;
 import org.kingbolt.core.Budget;
@@ -55,7 +56,7 @@ final class CompiledFamilies extends Families {
    * the component is left out, so that the set is minimal.
    */
   @Override
-  int[] lightest(boolean paths, double[] weights, WorkMeter meter) {
+  Optional<int[]> lightest(boolean paths, double[] weights, WorkMeter meter) {
     Diagram diagram = system.diagram();
     double[] least = new double[diagram.size()];
     least[paths ? Diagram.FAILS : Diagram.WORKS] = Double.POSITIVE_INFINITY;
@@ -67,6 +68,9 @@ final class CompiledFamilies extends Families {
         least[id] = Math.min(with, without);
         meter.at(diagram.size() / 8);
       }
+    }
+    if (least[diagram.root()] == Double.POSITIVE_INFINITY) {
+      return Optional.empty();
     }
     int[] members = new int[diagram.levels()];
     int count = 0;
@@ -82,7 +86,7 @@ final class CompiledFamilies extends Families {
         }
       }
     }
-    return Arrays.copyOf(members, count);
+    return Optional.of(Arrays.copyOf(members, count));
   }
 
   @Override

@@ -2,6 +2,7 @@ package org.kingbolt.bounds;
 
 import java.util.ArrayList;
 import java.util.List;
+import java.util.Optional;
 import java.util.function.Consumer;
 import org.kingbolt.core.Budget;
 import org.kingbolt.core.diagram.WorkMeter;
@@ -26,9 +27,10 @@ abstract class Families {
    * any set.
    *
    * @param weights one for every component, at least 0
-   * @return the members; empty if no set is known
+   * @return the members, none of a system that always works, or always fails; or no set, where none
+   *     is known
    */
-  abstract int[] lightest(boolean paths, double[] weights, WorkMeter meter);
+  abstract Optional<int[]> lightest(boolean paths, double[] weights, WorkMeter meter);
 
   /** Throws what kept the structure from being compiled, if anything did. */
   void requireLightest() {}
@@ -61,7 +63,7 @@ abstract class Families {
   }
 
   /** A set that is most likely to occur, by the sum of its members' logarithms. */
-  final int[] mostProbable(boolean paths, WorkMeter meter) {
+  final Optional<int[]> mostProbable(boolean paths, WorkMeter meter) {
     double[] occurs = values.occurs(paths);
     double[] fails = values.fails(paths);
     double[] weights = new double[occurs.length];

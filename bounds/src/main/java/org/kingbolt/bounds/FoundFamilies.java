@@ -3,6 +3,7 @@ package org.kingbolt.bounds;
 import java.util.Arrays;
 import java.util.Comparator;
 import java.util.HashSet;
+import java.util.Optional;
 import java.util.Set;
 import java.util.function.Consumer;
 import org.kingbolt.core.BudgetExceededException;
@@ -37,7 +38,7 @@ final class FoundFamilies extends Families {
 
   /** By halving: how many of the heaviest left can go at once; the next one must stay. */
   @Override
-  int[] lightest(boolean paths, double[] weights, WorkMeter meter) {
+  Optional<int[]> lightest(boolean paths, double[] weights, WorkMeter meter) {
     Integer[] order = new Integer[weights.length];
     Arrays.setAll(order, i -> i);
     Arrays.sort(order, Comparator.comparingDouble((Integer i) -> -weights[i]));
@@ -61,7 +62,7 @@ final class FoundFamilies extends Families {
         kept[count++] = order[gone++];
       }
     }
-    return Arrays.copyOf(kept, count);
+    return Optional.of(Arrays.copyOf(kept, count));
   }
 
   /** Whether what is kept, and what comes later in the order, is a path set or a cut set. */

@@ -1,5 +1,6 @@
 package org.kingbolt.bounds;
 
+import java.util.Optional;
 import org.kingbolt.core.Budget;
 import org.kingbolt.core.Probability;
 import org.kingbolt.core.diagram.WorkMeter;
@@ -35,9 +36,13 @@ final class Frechet {
    */
   static Probability notAnyAbove(Families families, boolean paths, WorkMeter meter) {
     double[] fails = families.values.fails(paths);
-    int[] set = families.lightest(paths, fails, meter);
-    if (set.length == 0) {
+    Optional<int[]> lightest = families.lightest(paths, fails, meter);
+    if (lightest.isEmpty()) {
       return Probability.CERTAIN;
+    }
+    int[] set = lightest.get();
+    if (set.length == 0) {
+      return Probability.IMPOSSIBLE;
     }
     int largest = set[0];
     double sum = 0;

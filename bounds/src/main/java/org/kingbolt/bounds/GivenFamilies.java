@@ -1,6 +1,7 @@
 package org.kingbolt.bounds;
 
 import java.util.List;
+import java.util.Optional;
 import java.util.function.Consumer;
 import org.kingbolt.core.diagram.WorkMeter;
 
@@ -39,8 +40,8 @@ final class GivenFamilies extends Families {
   }
 
   @Override
-  int[] lightest(boolean ofPaths, double[] weights, WorkMeter meter) {
-    int[] best = new int[0];
+  Optional<int[]> lightest(boolean ofPaths, double[] weights, WorkMeter meter) {
+    Optional<int[]> best = Optional.empty();
     double least = Double.POSITIVE_INFINITY;
     for (int[] set : ofPaths ? paths : cuts) {
       meter.at(1);
@@ -50,7 +51,7 @@ final class GivenFamilies extends Families {
       }
       if (sum < least) {
         least = sum;
-        best = set;
+        best = Optional.of(set);
       }
     }
     return best;

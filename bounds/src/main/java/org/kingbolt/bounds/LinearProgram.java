@@ -4,6 +4,7 @@ import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.HashSet;
 import java.util.List;
+import java.util.Optional;
 import java.util.Set;
 import org.apache.commons.math3.exception.MathIllegalStateException;
 import org.apache.commons.math3.optim.MaxIter;
@@ -92,8 +93,10 @@ final class LinearProgram {
       Families families, boolean paths, Budget budget, Effort effort) {
     WorkMeter meter = budget.start("solving a linear program over the dependence of components");
     LinearProgram program = new LinearProgram(families, paths, meter);
-    if (families.discarded(paths) < 1 && program.scale > 0) {
+    if (families.discarded(paths) < 1 && program.scale > 0 && families.values.size() > 0) {
       program.solve();
+    } else if (families.discarded(paths) == 0) {
+      program.attained = program.best;
     }
     effort.add(1 + program.rows.size());
     return program;
@@ -116,16 +119,18 @@ final class LinearProgram {
       for (int i = 0; i < prices.length; i++) {
         prices[i] = isFree(i) ? 1 : prices[i];
       }
-      int[] least = families.lightest(paths, prices, meter);
-      double covered = sum(least, prices);
-      double price = least.length == 0 ? 0 : sum(prices) / covered;
-      if (least.length == 0 || covered > 0) {
-        best = Math.min(best, price + families.discarded(paths));
+      Optional<int[]> found = families.lightest(paths, prices, meter);
+      if (found.isEmpty()) {
+        best = families.discarded(paths);
+        attained = best;
+        return;
       }
-      goOn =
-          least.length > 0
-              && covered < 1 - TOLERANCE / 10
-              && known.add(Arrays.stream(least).boxed().toList());
+      int[] least = found.get();
+      double covered = sum(least, prices);
+      if (covered > 0) {
+        best = Math.min(best, sum(prices) / covered + families.discarded(paths));
+      }
+      goOn = covered < 1 - TOLERANCE / 10 && known.add(Arrays.stream(least).boxed().toList());
       if (goOn) {
         rows.add(least);
         meter.now((long) rows.size() * (cost.length + 2L * rows.size()) / 12);

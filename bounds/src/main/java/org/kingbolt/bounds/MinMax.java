@@ -30,11 +30,10 @@ final class MinMax {
 
   private static SetProduct best(Families families, boolean paths, Budget budget, Effort effort) {
     SetProduct product = new SetProduct();
-    int[] set = families.mostProbable(paths, budget.start("searching the most probable set"));
+    families
+        .mostProbable(paths, budget.start("searching the most probable set"))
+        .ifPresent(set -> product.add(set, families.values, paths));
     effort.add(1);
-    if (set.length > 0) {
-      product.add(set, families.values, paths);
-    }
     return product;
   }
 }

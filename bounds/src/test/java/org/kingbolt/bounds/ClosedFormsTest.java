@@ -192,6 +192,23 @@ class ClosedFormsTest {
     assertEquals(BudgetExceededException.Limit.NODES, none.limit());
   }
 
+  /** What conditioning can lead to: every interval is the figure itself. */
+  @Test
+  void constantStructures_haveExactIntervals() {
+    Probabilities p = Probabilities.all(0.9);
+    Structure always = Structure.parallel("a", "b").givenWorking("a");
+    Structure never = Structure.series("a", "b").givenFailed("a");
+    for (Structure structure : List.of(always, never)) {
+      BoundsTable table = Bounds.of(structure).given(p).all();
+      assertEquals(8, table.rows().size(), table::toString);
+      for (BoundsTable.Row row : table) {
+        double works = structure.equals(always) ? 1 : 0;
+        assertEquals(works, row.interval().lower().working(), 1e-14, table::toString);
+        assertEquals(works, row.interval().upper().working(), 1e-14, table::toString);
+      }
+    }
+  }
+
   /** Slack for rounding grows with the components, and must not take the sides apart. */
   @Test
   void largeSystems_haveEndsWhoseSidesAddUp() {

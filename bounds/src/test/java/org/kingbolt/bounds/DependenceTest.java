@@ -254,7 +254,7 @@ class DependenceTest {
             sample.structure(), new ComponentValues(names, p.forComponents(names)), over);
     for (boolean paths : new boolean[] {true, false}) {
       java.util.Set<String> set = new java.util.HashSet<>();
-      for (int i : found.mostProbable(paths, Budget.ofHeap().start("searching"))) {
+      for (int i : found.mostProbable(paths, Budget.ofHeap().start("searching")).orElseThrow()) {
         set.add(names.get(i));
       }
       Oracle oracle = sample.oracle();
