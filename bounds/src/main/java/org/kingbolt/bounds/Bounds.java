@@ -1,5 +1,6 @@
 package org.kingbolt.bounds;
 
+import java.util.Collection;
 import java.util.Objects;
 import org.jspecify.annotations.Nullable;
 import org.kingbolt.core.CoherentSystem;
@@ -45,6 +46,23 @@ public final class Bounds {
     Objects.requireNonNull(
         system, "system is null; give a compiled system, or a structure to compile");
     return new Bounds(system.structure(), system);
+  }
+
+  /**
+   * Bounds from path sets and cut sets that the caller has: all of them, or, where a system has too
+   * many, some.
+   *
+   * @param pathSets sets of components that keep the system working; may be empty
+   * @param cutSets sets of components whose failure makes the system fail; may be empty
+   * @return a start for questions
+   * @throws IllegalArgumentException if there are no sets at all, or a set is empty or names a
+   *     component twice, or a name is blank, or a path set and a cut set have no component in
+   *     common
+   */
+  public static SetBounds ofSets(
+      Collection<? extends Collection<String>> pathSets,
+      Collection<? extends Collection<String>> cutSets) {
+    return SetBounds.of(pathSets, cutSets);
   }
 
   /**

@@ -1,19 +1,12 @@
 package org.kingbolt.bounds;
 
-import java.util.HashMap;
-import java.util.List;
-import java.util.Map;
 import java.util.Objects;
-import java.util.Set;
 import java.util.function.Predicate;
 import org.jspecify.annotations.Nullable;
 import org.kingbolt.core.Budget;
 import org.kingbolt.core.CoherentSystem;
-import org.kingbolt.core.MinimalSets;
 import org.kingbolt.core.Probabilities;
-import org.kingbolt.core.Probability;
 import org.kingbolt.core.Structure;
-import org.kingbolt.core.diagram.WorkMeter;
 
 /**
  * Bounds on one system's reliability at given probabilities of its components.
@@ -22,37 +15,30 @@ import org.kingbolt.core.diagram.WorkMeter;
  * outwards, so that an end at 1e-18 keeps its digits and rounding never takes the exact figure out
  * of the interval.
  *
+ * <p>Which contains which: by modules lies within Esary–Proschan (Bodin 1970); min–max and linear
+ * programming lie within Fréchet; second order lies within inclusion–exclusion of order 2. Of
+ * min–max and Esary–Proschan neither always contains the other: from below, Esary–Proschan is
+ * tighter where every cut has two members or more and components are good enough, min–max where the
+ * cuts are more than the members of the smallest path and components are bad enough; from above the
+ * same with paths and cuts exchanged (Barlow &amp; Proschan 1975, ch. 2). A series system attains
+ * the lower ends of both, a parallel system the upper ends.
+ *
  * <p>Immutable; safe to share between threads.
  */
 public final class BoundsAtProbabilities {
 
   private final Structure structure;
-  private final List<String> components;
   private final Probabilities p;
+  private final ComponentValues values;
 
-  /** Compiled when first needed; two threads may both do it. */
-  private volatile @Nullable CoherentSystem system;
-
-  private final Map<String, Probability> byName = new HashMap<>();
+  private final SystemFamilies families;
 
   BoundsAtProbabilities(Structure structure, @Nullable CoherentSystem system, Probabilities p) {
     this.structure = structure;
-    this.system = system;
-    this.components = structure.components();
     this.p = p;
-    List<Probability> values = p.forComponents(components);
-    for (int i = 0; i < values.size(); i++) {
-      byName.put(components.get(i), values.get(i));
-    }
-  }
-
-  private CoherentSystem compiled(Budget budget) {
-    CoherentSystem known = system;
-    if (known == null) {
-      known = structure.compile(budget);
-      system = known;
-    }
-    return known;
+    this.values =
+        new ComponentValues(structure.components(), p.forComponents(structure.components()));
+    this.families = new SystemFamilies(structure, system, values);
   }
 
   /**
@@ -110,7 +96,7 @@ public final class BoundsAtProbabilities {
       throw new IllegalArgumentException(
           "relative width " + relativeWidth + "; give 0 or more, such as 0.01 for one percent");
     }
-    return CertifiedInterval.of(structure, p, budget, relativeWidth, goOn, slack());
+    return CertifiedInterval.of(structure, p, budget, relativeWidth, goOn, values.slack());
   }
 
   /**
@@ -155,31 +141,54 @@ public final class BoundsAtProbabilities {
    * probabilities do not give.) Tight where the system is highly reliable or hardly reliable at
    * all; attained by series and parallel systems.
    *
+   * <p>Where one family is too large for the budget its end is trivial, and the reason says so.
+   *
    * <p>Source: Esary &amp; Proschan, Coherent structures of non-identical components, Technometrics
    * 5 (1963) 191.
    *
-   * @param budget how much work it may cost; every minimal set counts as a node
+   * @param budget how much work each family may cost; every minimal set counts as a node
    * @return the interval. Cost: linear in the total size of all minimal path and cut sets.
-   * @throws org.kingbolt.core.BudgetExceededException if the budget is used up
+   * @throws org.kingbolt.core.BudgetExceededException if the budget is used up by both families
    */
   public Interval esaryProschan(Budget budget) {
+    return EsaryProschan.of(families.all(budget), budget, new Effort());
+  }
+
+  /**
+   * Esary–Proschan bounds by modules within {@link Budget#ofHeap()}.
+   *
+   * @return the interval; see {@link #modular(Budget)}
+   * @throws org.kingbolt.core.BudgetExceededException if a module has too many minimal sets
+   */
+  public Interval modular() {
+    return modular(Budget.ofHeap());
+  }
+
+  /**
+   * Esary–Proschan bounds of every module, put together by those of the structure that is left when
+   * each module stands as one component. Never wider than the flat bounds, up to rounding, and for
+   * nested gates within reach where those are not: the sets of the whole are never listed.
+   *
+   * <p>Holds for independent components. (Min–max and Fréchet bounds do not gain from modules: the
+   * best path of the whole is made of best paths of the modules.)
+   *
+   * <p>Source: Bodin, Approximations to system reliability using a modular decomposition,
+   * Technometrics 12 (1970) 335 (from memory).
+   *
+   * @param budget how much work each module may cost
+   * @return the interval. Cost: linear in the total size of the modules' own minimal sets.
+   * @throws org.kingbolt.core.BudgetExceededException if the budget is used up
+   */
+  public Interval modular(Budget budget) {
     requireBudget(budget);
-    SetProduct cuts = combined(compiled(budget).minimalCutSets(budget), false, budget);
-    SetProduct paths = combined(compiled(budget).minimalPathSets(budget), true, budget);
-    return new Interval(
-        Rounding.down(cuts.none(), cuts.any(), cuts.operations() + slack()),
-        Rounding.up(paths.any(), paths.none(), paths.operations() + slack()),
-        Assumption.INDEPENDENT,
-        "Esary-Proschan",
-        "with independent components the minimal cuts are at least as likely to hold all together,"
-            + " and the minimal paths to fail all together, as if they shared no components");
+    return Modular.of(structure, values, () -> families.all(budget), budget, new Effort());
   }
 
   /**
    * Min–max bounds within {@link Budget#ofHeap()}.
    *
    * @return the interval; see {@link #minMax(Budget)}
-   * @throws org.kingbolt.core.BudgetExceededException if the minimal sets are too many to hold
+   * @throws org.kingbolt.core.BudgetExceededException if the thread is interrupted
    */
   public Interval minMax() {
     return minMax(Budget.ofHeap());
@@ -197,58 +206,207 @@ public final class BoundsAtProbabilities {
    * 2.
    *
    * @param budget how much work it may cost
-   * @return the interval. Cost: the diagrams of minimal sets, of which only the best set is listed.
+   * @return the interval. Cost: two scans of the diagram; no set is listed but the best. What
+   *     cannot be compiled within the budget is given the same budget again to find some path and
+   *     some cut instead, with which the interval holds, but is wider.
    * @throws org.kingbolt.core.BudgetExceededException if the budget is used up
    */
   public Interval minMax(Budget budget) {
+    return MinMax.of(families.some(budget), budget, new Effort());
+  }
+
+  /**
+   * Fréchet bounds within {@link Budget#ofHeap()}.
+   *
+   * @return the interval; see {@link #frechet(Budget)}
+   * @throws org.kingbolt.core.BudgetExceededException if the thread is interrupted
+   */
+  public Interval frechet() {
+    return frechet(Budget.ofHeap());
+  }
+
+  /**
+   * Bounds that hold whatever the dependence: the system fails at most as often as the sum of q
+   * over a path set, and works at most as often as the sum of p over a cut set; the best sets are
+   * taken. (The sum over all cut sets of the smallest q in each is never better: those members
+   * together hold a path.) Best possible for two-terminal networks with one component a link, by
+   * the max-flow min-cut theorem; see {@link #linearProgramming(Budget)} for the others.
+   *
+   * <p>Source: Fréchet, Généralisation du théorème des probabilités totales, Fund. Math. 25 (1935)
+   * 379 (from memory).
+   *
+   * @param budget how much work it may cost
+   * @return the interval. Cost: two scans of the diagram. What cannot be compiled within the budget
+   *     is given the same budget again to find some path and some cut instead, with which the
+   *     interval holds, but is wider.
+   * @throws org.kingbolt.core.BudgetExceededException if the budget is used up
+   */
+  public Interval frechet(Budget budget) {
+    return Frechet.of(families.some(budget), budget, new Effort());
+  }
+
+  /**
+   * The best possible bounds whatever the dependence, within {@link Budget#ofHeap()}.
+   *
+   * @return the interval; see {@link #linearProgramming(Budget)}
+   * @throws org.kingbolt.core.BudgetExceededException if the work grows too large
+   */
+  public Interval linearProgramming() {
+    return linearProgramming(Budget.ofHeap());
+  }
+
+  /**
+   * The best possible bounds whatever the dependence: the least and the most reliability of any
+   * joint distribution in which each component has its own probability, as a linear program.
+   *
+   * <p>Of the 2^n states only those count in which one minimal set has failed, or works, and
+   * nothing else, and of these as many as the solution needs; so the number of components is not
+   * limited, but more than a few dozen should be given a budget of time. The interval holds however
+   * imprecise the solver is; the reason says whether both ends are attained, to 1e-9 of themselves.
+   *
+   * <p>Source: Hailperin, Best possible inequalities for the probability of a logical function of
+   * events, Amer. Math. Monthly 72 (1965) 343 (from memory).
+   *
+   * @param budget how much work it may cost
+   * @return the interval. Cost: a linear program and a scan of the diagram for every set used.
+   * @throws org.kingbolt.core.BudgetExceededException if the budget is used up; {@link
+   *     #frechet(Budget)} costs less
+   */
+  public Interval linearProgramming(Budget budget) {
+    return LinearProgram.of(families.all(budget), budget, new Effort());
+  }
+
+  /**
+   * Inclusion–exclusion cut off at an order, within {@link Budget#ofHeap()}.
+   *
+   * @param order how many sets are taken together at most, at least 1
+   * @return the interval; see {@link #inclusionExclusion(int, Budget)}
+   * @throws IllegalArgumentException if the order is less than 1
+   * @throws org.kingbolt.core.BudgetExceededException if there are too many terms
+   */
+  public Interval inclusionExclusion(int order) {
+    return inclusionExclusion(order, Budget.ofHeap());
+  }
+
+  /**
+   * Inclusion–exclusion over the minimal cut sets and over the minimal path sets, cut off at an
+   * order: sums of odd order are no smaller, and sums of even order no larger, than the probability
+   * that any set occurs. Of all orders up to the one given the best of each kind is taken, of both
+   * families the better end, and where one family is too large for the budget the other stands
+   * alone. A sum below 0 or above 1 says nothing; 0 or 1 stands in its place, and the reason says
+   * so.
+   *
+   * <p>Holds for independent components. Exact, up to rounding, when the order reaches the number
+   * of sets. Rounding of alternating sums is counted in full.
+   *
+   * <p>Source: Bonferroni 1936; Feller, An Introduction to Probability Theory and Its Applications,
+   * vol. 1, ch. IV (from memory).
+   *
+   * @param order how many sets are taken together at most, at least 1
+   * @param budget how much work each family may cost; every term counts as a node
+   * @return the interval. Cost: linear in the number of choices of up to {@code order} sets.
+   * @throws IllegalArgumentException if the order is less than 1
+   * @throws org.kingbolt.core.BudgetExceededException if the budget is used up by both families
+   */
+  public Interval inclusionExclusion(int order, Budget budget) {
+    return Closed.inclusionExclusion(order, families.all(budget), budget, new Effort());
+  }
+
+  /**
+   * Second-order bounds within {@link Budget#ofHeap()}.
+   *
+   * @return the interval; see {@link #secondOrder(Budget)}
+   * @throws org.kingbolt.core.BudgetExceededException if there are too many pairs of sets
+   */
+  public Interval secondOrder() {
+    return secondOrder(Budget.ofHeap());
+  }
+
+  /**
+   * The best bounds from pairs of minimal sets, for independent components: any set occurs at most
+   * as often as all of them in sum less the pairs along the best tree, and at least as often as
+   * {@code 2/(k+1)} times the sum less {@code 2/(k(k+1))} times all pairs, for the best k. Over cut
+   * sets and over path sets, of which the better end is taken; where one family is too large the
+   * other stands alone. The bound of Kounias (1968) from above is that of a tree that is a star,
+   * and so never better.
+   *
+   * <p>Sources: Hunter, J. Appl. Probab. 13 (1976) 597; Worsley, Biometrika 69 (1982) 297; Dawson
+   * &amp; Sankoff, Proc. Amer. Math. Soc. 18 (1967) 504 (from memory).
+   *
+   * @param budget how much work each family may cost; every pair of sets counts as a node
+   * @return the interval. Cost: quadratic in the number of sets.
+   * @throws org.kingbolt.core.BudgetExceededException if the budget is used up by both families
+   */
+  public Interval secondOrder(Budget budget) {
+    return Closed.secondOrder(families.all(budget), budget, new Effort());
+  }
+
+  /**
+   * Delta–star replacement within {@link Budget#ofHeap()}.
+   *
+   * @return the approximation; see {@link #deltaStar(Budget)}
+   * @throws IllegalArgumentException if the structure is no network of links between two nodes
+   */
+  public Approximation deltaStar() {
+    return deltaStar(Budget.ofHeap());
+  }
+
+  /**
+   * The old hand method for networks of independent links: series and parallel links are joined,
+   * three links in a delta are replaced by a star that joins every two of its corners equally
+   * often, and stars by deltas, until one link is left. The result is approximate: a delta and its
+   * star differ in how often all three corners are joined. Kept because reviewers still meet it;
+   * the certified interval stands beside it.
+   *
+   * <p>Source: Gadani, System effectiveness evaluation using star and delta transformations, IEEE
+   * Trans. Reliab. 30 (1981) 43 (from memory).
+   *
+   * @param budget how much work the replacements, and then the interval, may cost
+   * @return the approximate figure with {@link #within(Budget)} beside it
+   * @throws IllegalArgumentException if the structure is no network of links between two nodes, or
+   *     a component stands in more than one link, or replacements do not take the network apart
+   * @throws org.kingbolt.core.BudgetExceededException if the budget is used up by the replacements,
+   *     or the thread is interrupted
+   */
+  public Approximation deltaStar(Budget budget) {
     requireBudget(budget);
-    SetProduct path = best(compiled(budget).minimalPathSets(budget), true, budget);
-    SetProduct cut = best(compiled(budget).minimalCutSets(budget), false, budget);
-    return new Interval(
-        Rounding.down(path.any(), path.none(), path.operations() + slack()),
-        Rounding.up(cut.none(), cut.any(), cut.operations() + slack()),
-        Assumption.ASSOCIATED,
-        "min-max",
-        "with associated components the system works at least as often as its best path, and fails"
-            + " at least as often as its worst cut, would with independent members");
+    return DeltaStar.of(structure, p, budget, () -> within(budget));
   }
 
-  private static void requireBudget(Budget budget) {
+  /**
+   * All intervals, each within a million nodes.
+   *
+   * @return the table; see {@link #all(Budget)}
+   * @throws org.kingbolt.core.BudgetExceededException if the thread is interrupted
+   */
+  public BoundsTable all() {
+    return all(BoundsTable.usualBudget());
+  }
+
+  /**
+   * The intervals of every method that applies, the tightest last, with assumption, reason and
+   * cost; methods that use up the budget are listed with why.
+   *
+   * @param budget how much work each method may cost; compiling counts as one of them
+   * @return the table
+   * @throws org.kingbolt.core.BudgetExceededException if the thread is interrupted
+   */
+  public BoundsTable all(Budget budget) {
+    requireBudget(budget);
+    return families.table(
+        budget,
+        (given, effort) ->
+            within(
+                given,
+                0,
+                interval -> {
+                  effort.add(1);
+                  return true;
+                }));
+  }
+
+  static void requireBudget(Budget budget) {
     Objects.requireNonNull(budget, "budget is null; give one, such as Budget.ofHeap()");
-  }
-
-  /** Operations in an exact evaluation, for whose rounding an interval must leave room, too. */
-  private long slack() {
-    return 4L * components.size();
-  }
-
-  private SetProduct combined(MinimalSets sets, boolean paths, Budget budget) {
-    WorkMeter meter = budget.start("combining minimal sets");
-    SetProduct product = new SetProduct();
-    long count = 0;
-    for (Set<String> set : sets) {
-      meter.at(++count);
-      add(product, set, paths);
-    }
-    return product;
-  }
-
-  private SetProduct best(MinimalSets sets, boolean paths, Budget budget) {
-    SetProduct product = new SetProduct();
-    for (Set<String> set : sets.mostProbable(1, p, budget)) {
-      add(product, set, paths);
-    }
-    return product;
-  }
-
-  private void add(SetProduct product, Set<String> set, boolean paths) {
-    product.begin();
-    for (String name : set) {
-      Probability value = Objects.requireNonNull(byName.get(name));
-      product.member(
-          paths ? value.working() : value.failing(), paths ? value.failing() : value.working());
-    }
-    product.end();
   }
 
   /**
@@ -259,7 +417,7 @@ public final class BoundsAtProbabilities {
   @Override
   public String toString() {
     return "Bounds["
-        + components.size()
-        + " components] at given probabilities; call within(budget), esaryProschan() or minMax()";
+        + values.size()
+        + " components] at given probabilities; call all() or within(budget)";
   }
 }

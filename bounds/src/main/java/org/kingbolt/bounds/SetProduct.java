@@ -29,6 +29,17 @@ final class SetProduct {
     operations++;
   }
 
+  /** A whole set: path sets occur while their members work, cut sets when they have failed. */
+  void add(int[] set, ComponentValues values, boolean paths) {
+    double[] occurs = values.occurs(paths);
+    double[] fails = values.fails(paths);
+    begin();
+    for (int member : set) {
+      member(occurs[member], fails[member]);
+    }
+    end();
+  }
+
   double any() {
     return any;
   }
