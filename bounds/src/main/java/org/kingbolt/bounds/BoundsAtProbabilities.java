@@ -119,7 +119,7 @@ public final class BoundsAtProbabilities {
   public Estimate simulate(Simulation simulation) {
     Objects.requireNonNull(
         simulation, "simulation is null; give one, such as Simulation.toRelativeError(0.01)");
-    return SimulationPlan.run(structure, p, simulation, this::compiled);
+    return SimulationPlan.run(structure, p, simulation, families::compiled);
   }
 
   /**

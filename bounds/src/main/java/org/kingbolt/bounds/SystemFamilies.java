@@ -26,13 +26,17 @@ final class SystemFamilies {
 
   /** All minimal sets. */
   Families all(Budget budget) {
+    return new CompiledFamilies(compiled(budget), values, budget);
+  }
+
+  CoherentSystem compiled(Budget budget) {
     BoundsAtProbabilities.requireBudget(budget);
     CoherentSystem known = system;
     if (known == null) {
       known = structure.compile(budget);
       system = known;
     }
-    return new CompiledFamilies(known, values, budget);
+    return known;
   }
 
   /**
