@@ -97,8 +97,9 @@ public final class ImportanceAtProbabilities {
    *
    * <p>For each component the event is built as a decision diagram, as the union of the cut sets
    * that contain it, bottom-up over the diagram of all minimal cut sets, and evaluated as a sum of
-   * non-negative terms. For meshed systems the diagrams may outgrow any memory: {@link
-   * #fussellVeselyRareEvent()} is far cheaper.
+   * non-negative terms. Cost: for every component at least a scan of the cut sets' diagram, which
+   * for n components in series or parallel is the square of n. For meshed systems the diagrams may
+   * outgrow any memory: {@link #fussellVeselyRareEvent()} is far cheaper.
    *
    * <p>Source: Fussell, How to hand-calculate system reliability and safety characteristics, IEEE
    * Trans. Reliab. 24 (1975) 169, after Vesely (from memory).
