@@ -3,7 +3,6 @@ package org.kingbolt.importance;
 import com.google.common.base.Suppliers;
 import java.util.Arrays;
 import java.util.Collection;
-import java.util.List;
 import java.util.Map;
 import java.util.Objects;
 import java.util.function.Supplier;
@@ -260,7 +259,7 @@ public final class ImportanceAtProbabilities {
    */
   public double interaction(String... components) {
     Objects.requireNonNull(components, "components is null; name at least one");
-    int[] set = Names.places(system.components(), List.of(components), "the set");
+    int[] set = Names.places(system.components(), Arrays.asList(components), "the set");
     Gains given = Gains.of(system, p);
     WorkMeter meter = Budget.ofHeap().start("working out an interaction");
     return new MixedDerivatives(system.diagram(), given.working(), given.failing(), meter).of(set);

@@ -203,6 +203,43 @@ class LifetimeImportanceTest {
     }
   }
 
+  /**
+   * By hand: once a has failed, at some time in the first second, b decides alone, and S (-ln S) of
+   * a uniform lifetime gives a quarter of its width; a decides only after b has begun to fail,
+   * which is never. In series it is the other way round.
+   */
+  @Test
+  void natvig_seesNarrowLifetimesFarApart() {
+    Structure parallel = Structure.parallel("a", "b");
+    Structure series = Structure.series("a", "b");
+    for (double width : new double[] {1, 1e-2, 1e-4}) {
+      Map<String, RealDistribution> lifetimes =
+          Map.of(
+              "a", new UniformRealDistribution(1, 1 + width),
+              "b", new UniformRealDistribution(100, 100 + width));
+      assertEquals(1, Importance.of(parallel).natvig(lifetimes).value("b"), 1e-9);
+      assertEquals(1, Importance.of(series).natvig(lifetimes).value("a"), 1e-9);
+      Structure both = Structure.parse("series(a, parallel(b, c))");
+      Map<String, RealDistribution> three =
+          Map.of(
+              "a", new UniformRealDistribution(100, 100 + 3 * width),
+              "b", new UniformRealDistribution(10, 10 + width),
+              "c", new UniformRealDistribution(50, 50 + width));
+      assertEquals(1, Importance.of(both).natvig(three).value("c"), 1e-9);
+    }
+  }
+
+  /** All alike: by symmetry each has the same share, however steep the wear. */
+  @Test
+  void natvig_takesLifetimesThatEndSteeply() {
+    for (RealDistribution steep :
+        List.of(new UniformRealDistribution(2, 5), new WeibullDistribution(20, 3))) {
+      Map<String, RealDistribution> lifetimes = Map.of("a", steep, "b", steep, "c", steep);
+      Ranking ranking = Importance.of(Structure.atLeast(2, "a", "b", "c")).natvig(lifetimes);
+      ranking.asMap().values().forEach(value -> assertEquals(1 / 3.0, value, 1e-10));
+    }
+  }
+
   @Test
   void badLifetimes_areNamed() {
     Importance pair = Importance.of(Structure.parallel("a", "b"));
