@@ -23,7 +23,7 @@ final class AlikeLifetimes {
   static double[] rounded(CoherentSystem system, Budget budget) {
     int n = system.components().size();
     WorkMeter meter = budget.start("integrating over a common probability");
-    GaussLegendre rule = GaussLegendre.of(Math.max(1, (n + 1) / 2));
+    GaussLegendre rule = GaussLegendre.of(Math.max(1, (n + 1) / 2), meter);
     double[] values = new double[n];
     double[] working = new double[n];
     double[] failing = new double[n];

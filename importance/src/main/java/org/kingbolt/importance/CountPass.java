@@ -17,6 +17,8 @@ final class CountPass {
   private final double[] failing;
   private final boolean[] member;
   private final WorkMeter meter;
+
+  /** In bytes. */
   private long held;
 
   private CountPass(CoherentSystem system, Gains given, int[] members, WorkMeter meter) {
@@ -49,15 +51,19 @@ final class CountPass {
     for (int level = diagram.levels() - 1; level >= 0; level--) {
       int variable = diagram.variableAt(level);
       for (int id = diagram.from(level); id < diagram.to(level); id++) {
-        double[] high = raised(values[diagram.high(id)], below);
-        double[] low = raised(values[diagram.low(id)], below);
+        double[] high = raised(values, diagram.high(id), below);
+        double[] low = raised(values, diagram.low(id), below);
         values[id] = member[variable] ? split(high, low) : mean(high, low, variable);
-        held += 1 + (long) values[id].length * Double.BYTES / WorkMeter.BYTES_PER_NODE;
-        meter.at(held);
+        hold(WorkMeter.BYTES_PER_NODE + (long) values[id].length * Double.BYTES);
       }
       below += member[variable] ? 1 : 0;
     }
-    return raised(values[diagram.root()], degree);
+    return raised(values, diagram.root(), degree);
+  }
+
+  private void hold(long more) {
+    held += more;
+    meter.at(held / WorkMeter.BYTES_PER_NODE);
   }
 
   private double[] mean(double[] high, double[] low, int variable) {
@@ -80,12 +86,15 @@ final class CountPass {
     return values;
   }
 
-  /** Over more members that make no difference. */
-  private static double[] raised(double[] values, int degree) {
-    double[] raised = values;
-    while (raised.length <= degree) {
-      raised = split(raised, raised);
+  /**
+   * Over more members that make no difference. Those above ask for as many or more, so what has
+   * been raised is kept, and is not raised again from its beginning for each of them.
+   */
+  private double[] raised(double[][] values, int id, int degree) {
+    while (values[id].length <= degree) {
+      values[id] = split(values[id], values[id]);
+      hold(Double.BYTES);
     }
-    return raised;
+    return values[id];
   }
 }

@@ -2,6 +2,7 @@ package org.kingbolt.importance;
 
 import com.google.common.collect.ImmutableMap;
 import java.util.ArrayList;
+import java.util.HashMap;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
@@ -210,13 +211,13 @@ public final class Diagnosis {
 
   /** Before the question, with known components held. */
   private Gains conditioned() {
-    Gains held = prior;
+    Map<Integer, Probability> held = new HashMap<>();
     Map<String, Integer> places = Names.places(system.components());
-    for (Map.Entry<String, Boolean> entry : known.entrySet()) {
-      Probability sure = entry.getValue() ? Probability.CERTAIN : Probability.IMPOSSIBLE;
-      held = held.with(Names.place(places, entry.getKey()), sure);
-    }
-    return held;
+    known.forEach(
+        (name, works) ->
+            held.put(
+                Names.place(places, name), works ? Probability.CERTAIN : Probability.IMPOSSIBLE));
+    return prior.with(held);
   }
 
   private Posteriors.Event state() {

@@ -1,6 +1,8 @@
 package org.kingbolt.importance;
 
 import java.util.List;
+import java.util.Map;
+import java.util.OptionalDouble;
 import org.kingbolt.core.CoherentSystem;
 import org.kingbolt.core.Probabilities;
 import org.kingbolt.core.Probability;
@@ -43,6 +45,18 @@ final class Gains {
       up[member] = value.working();
       down[member] = value.failing();
     }
+    return new Gains(system, up, down);
+  }
+
+  /** The same with several components at probabilities of their own. */
+  Gains with(Map<Integer, Probability> values) {
+    double[] up = working.clone();
+    double[] down = failing.clone();
+    values.forEach(
+        (member, value) -> {
+          up[member] = value.working();
+          down[member] = value.failing();
+        });
     return new Gains(system, up, down);
   }
 
@@ -116,8 +130,30 @@ final class Gains {
 
   /** How much likelier one component is to work here than there, where that is less. */
   double change(int member, Gains worse) {
-    double up = working[member];
-    double down = worse.failing[member];
-    return up < down ? up - worse.working[member] : down - failing[member];
+    return step(working[member], failing[member], worse.working[member], worse.failing[member]);
+  }
+
+  /** How much likelier the one is to work than the other, where that is less. */
+  static double step(Probability to, Probability from) {
+    return step(to.working(), to.failing(), from.working(), from.failing());
+  }
+
+  private static double step(double toUp, double toDown, double fromUp, double fromDown) {
+    return toUp < fromDown ? toUp - fromUp : fromDown - toDown;
+  }
+
+  /**
+   * How much likelier the system is to work here than there, less where that is less; empty where
+   * the difference would lose digits.
+   */
+  OptionalDouble plainly(Gains before) {
+    Evaluation here = evaluation();
+    Evaluation there = before.evaluation();
+    double works = Math.max(here.works(), there.works());
+    double fails = Math.max(here.fails(), there.fails());
+    double difference = works < fails ? here.works() - there.works() : there.fails() - here.fails();
+    return Math.abs(difference) >= SHARE * Math.min(works, fails)
+        ? OptionalDouble.of(difference)
+        : OptionalDouble.empty();
   }
 }

@@ -1,6 +1,7 @@
 package org.kingbolt.importance;
 
 import java.util.Arrays;
+import org.kingbolt.core.diagram.WorkMeter;
 
 /**
  * The points and weights of Gauss-Legendre quadrature on [0, 1], exact for polynomials up to degree
@@ -36,11 +37,12 @@ final class GaussLegendre {
     return weights[k];
   }
 
-  static GaussLegendre of(int n) {
+  static GaussLegendre of(int n, WorkMeter meter) {
     double[] points = new double[n];
     double[] complements = new double[n];
     double[] weights = new double[n];
     for (int i = 0; i < (n + 1) / 2; i++) {
+      meter.now(0);
       // on [-1, 1], measured from -1 so that points near the end keep their digits
       double angle = Math.PI * (i + 0.75) / (n + 0.5);
       double x = -Math.cos(angle);

@@ -47,11 +47,12 @@ public final class GroupImportance {
     this.first = first;
     List<String> titles = new ArrayList<>();
     List<int[]> members = new ArrayList<>();
+    Map<String, Integer> places = Names.places(system.components());
     groups.forEach(
         (name, components) -> {
           titles.add(Objects.requireNonNull(name, "a group's name is null; give it a name"));
           String what = "group " + Names.quoted(name);
-          members.add(Names.places(system.components(), components, what));
+          members.add(Names.places(places, components, what));
         });
     this.names = ImmutableList.copyOf(titles);
     this.groups = ImmutableList.copyOf(members);

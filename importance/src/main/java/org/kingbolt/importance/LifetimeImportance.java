@@ -20,9 +20,13 @@ final class LifetimeImportance {
 
   private static final double STRIDE = 8;
 
-  /** The largest share that the second half of the time may have. */
+  /** The largest share that as much time again may have. */
   private static final double HEAVY = 0.01;
 
+  /** How much of a lifetime may pass in one piece. */
+  private static final double MOST_RISEN = 0.25;
+
+  private static final double ANY = 1e300;
   private static final double ALLOWED = 1e-9;
   private static final double EARLIEST = 1e-280;
   private static final double LATEST = 1e280;
@@ -83,12 +87,18 @@ final class LifetimeImportance {
   double[] natvig() {
     double from = early();
     double to = late();
-    LogQuadrature quadrature = new LogQuadrature(lifetimes.length, this::gains, (a, b, c) -> 0);
-    double crude = 0;
-    for (double at = from; at < to; at *= STRIDE) {
-      crude += DoubleStream.of(quadrature.once(at, Math.min(to, at * STRIDE))).sum();
+    LogQuadrature quadrature = new LogQuadrature(lifetimes.length, this::gains, this::unseen);
+    // so large a whole that a piece is halved only where a lifetime might be stepped over
+    double crude = DoubleStream.of(integrate(quadrature, from, to, ANY)).sum();
+    if (!(crude > 0)) {
+      throw new IllegalArgumentException(
+          "no gains were found between times "
+              + from
+              + " and "
+              + to
+              + "; give lifetimes without jumps, in another unit of time");
     }
-    double last = DoubleStream.of(quadrature.once(to / 2, to)).sum();
+    double last = DoubleStream.of(quadrature.once(to, 2 * to)).sum();
     if (!(last <= HEAVY * crude)) {
       throw new IllegalArgumentException(
           "much of the expected gains lies where the system survives with less than 1e-12; give"
@@ -172,6 +182,18 @@ final class LifetimeImportance {
       double failed = lifetimes[i].cumulativeProbability(time);
       out[i] = failed == 1 ? 0 : -(1 - failed) * Math.log1p(-failed) * derivatives[i];
     }
+  }
+
+  /** Too much where a lifetime may lie between the points at which a piece is looked at. */
+  private double unseen(double from, double to, double[] integrals) {
+    meter.now(system.diagram().size());
+    for (RealDistribution lifetime : lifetimes) {
+      double risen = lifetime.cumulativeProbability(to) - lifetime.cumulativeProbability(from);
+      if (risen > MOST_RISEN) {
+        return Double.POSITIVE_INFINITY;
+      }
+    }
+    return 0;
   }
 
   /** Over any time, the failures that stop the system add up to its loss of reliability. */

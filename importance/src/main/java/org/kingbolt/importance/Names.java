@@ -1,10 +1,12 @@
 package org.kingbolt.importance;
 
 import java.util.Collection;
+import java.util.HashSet;
 import java.util.LinkedHashMap;
 import java.util.List;
 import java.util.Map;
 import java.util.Objects;
+import java.util.Set;
 import java.util.stream.Collectors;
 import org.jspecify.annotations.Nullable;
 
@@ -37,19 +39,22 @@ final class Names {
 
   /** The places of components of which none is named twice. */
   static int[] places(List<String> components, Collection<String> named, String what) {
+    return places(places(components), named, what);
+  }
+
+  /** The same, where the places are at hand. Cost: by what is named. */
+  static int[] places(Map<String, Integer> places, Collection<String> named, String what) {
     Objects.requireNonNull(named, () -> what + " is null; give the components' names");
-    Map<String, Integer> places = places(components);
     int[] found = named.stream().mapToInt(name -> place(places, name)).toArray();
     if (found.length == 0) {
       throw new IllegalArgumentException(what + " is empty; name at least one component");
     }
-    boolean[] seen = new boolean[components.size()];
-    for (int place : found) {
-      if (seen[place]) {
+    Set<String> seen = new HashSet<>();
+    for (String name : named) {
+      if (!seen.add(name)) {
         throw new IllegalArgumentException(
-            what + " names " + quoted(components.get(place)) + " twice; name it once");
+            what + " names " + quoted(name) + " twice; name it once");
       }
-      seen[place] = true;
     }
     return found;
   }

@@ -77,8 +77,7 @@ public final class Tornado {
       if (isVaried(name, low, high)) {
         Probability from = low.get(name);
         Probability to = high.get(name);
-        double change = given.with(i, to).change(i, given.with(i, from));
-        double swing = change * derivatives[i];
+        double swing = Gains.step(to, from) * derivatives[i];
         unranked.add(new Bar(0, name, from, to, at(scan, i, from), at(scan, i, to), swing));
       }
     }

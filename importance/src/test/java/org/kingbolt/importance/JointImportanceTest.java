@@ -132,6 +132,23 @@ class JointImportanceTest {
     }
   }
 
+  /** By hand: with three in parallel, two of them made twice as good. */
+  @Test
+  void smallChanges_keepTheirDigits() {
+    Probabilities p =
+        Probabilities.all(Probability.failing(1e-8)).with("w", Probability.failing(0.25));
+    Map<String, Probability> better =
+        Map.of("a", Probability.failing(5e-9), "b", Probability.failing(5e-9));
+    Structure alone = Structure.parse("parallel(a, b, c)");
+    assertNear(0.75e-24, Importance.of(alone).given(p).change(better).total(), "alone");
+    Structure behind = Structure.parse("series(w, parallel(a, b, c))");
+    assertNear(0.75 * 0.75e-24, Importance.of(behind).given(p).change(better).total(), "behind w");
+    Map<String, Probability> worse =
+        Map.of("a", Probability.failing(2e-8), "b", Probability.failing(2e-8));
+    assertNear(-3e-24, Importance.of(alone).given(p).change(worse).total(), "worse");
+    assertEquals(0, Importance.of(alone).given(p).change(Map.of()).total());
+  }
+
   /** A series needs all: q_i q_j at the top is p of the rest; a parallel is its mirror image. */
   @Test
   void smallValues_keepTheirDigits() {

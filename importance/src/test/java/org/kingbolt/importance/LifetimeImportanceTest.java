@@ -149,6 +149,97 @@ class LifetimeImportanceTest {
     assertEquals(1, parallel.total().orElseThrow(), 1e-14);
   }
 
+  /**
+   * Exponential lifetimes: over the states of the others in which a component decides, the integral
+   * of L_i t exp(-L_i t) times the state's probability, multiplied out, is a sum of terms L_i / a^2
+   * with rates a.
+   */
+  @Property(tries = 200)
+  void natvig_isTheSumOverDecidingStates(
+      @ForAll("structures") Sample sample, @ForAll Random random) {
+    Oracle oracle = sample.oracle();
+    int n = oracle.names().size();
+    if (n > 6) {
+      return;
+    }
+    double[] rate = new double[n];
+    Map<String, RealDistribution> lifetimes = new LinkedHashMap<>();
+    for (int i = 0; i < n; i++) {
+      rate[i] = Math.pow(10, 2 * random.nextDouble() - 1);
+      lifetimes.put(oracle.names().get(i), new ExponentialDistribution(1 / rate[i]));
+    }
+    double[] gain = new double[n];
+    double all = 0;
+    for (int i = 0; i < n; i++) {
+      int bit = 1 << i;
+      for (int state = 0; state < 1 << n; state++) {
+        if ((state & bit) != 0
+            && oracle.table().works(state)
+            && !oracle.table().works(state & ~bit)) {
+          gain[i] += rate[i] * ofState(rate, state);
+        }
+      }
+      all += gain[i];
+    }
+    Ranking ranking = Importance.of(sample.structure()).natvig(lifetimes);
+    for (int i = 0; i < n; i++) {
+      assertEquals(gain[i] / all, ranking.value(oracle.names().get(i)), 1e-9);
+    }
+  }
+
+  /** The integral of t times the probability of a state at t, by inclusion and exclusion. */
+  private static double ofState(double[] rate, int working) {
+    int others = ((1 << rate.length) - 1) & ~working;
+    double sum = 0;
+    for (int part = others; ; part = (part - 1) & others) {
+      double a = 0;
+      for (int i = 0; i < rate.length; i++) {
+        a += ((working | part) >>> i & 1) != 0 ? rate[i] : 0;
+      }
+      sum += (Integer.bitCount(part) % 2 == 0 ? 1 : -1) / (a * a);
+      if (part == 0) {
+        return sum;
+      }
+    }
+  }
+
+  /**
+   * By hand: once a has failed, at some time in the first second, b decides alone, and S (-ln S) of
+   * a uniform lifetime gives a quarter of its width; a decides only after b has begun to fail,
+   * which is never. In series it is the other way round.
+   */
+  @Test
+  void natvig_seesNarrowLifetimesFarApart() {
+    Structure parallel = Structure.parallel("a", "b");
+    Structure series = Structure.series("a", "b");
+    for (double width : new double[] {1, 1e-2, 1e-4}) {
+      Map<String, RealDistribution> lifetimes =
+          Map.of(
+              "a", new UniformRealDistribution(1, 1 + width),
+              "b", new UniformRealDistribution(100, 100 + width));
+      assertEquals(1, Importance.of(parallel).natvig(lifetimes).value("b"), 1e-9);
+      assertEquals(1, Importance.of(series).natvig(lifetimes).value("a"), 1e-9);
+      Structure both = Structure.parse("series(a, parallel(b, c))");
+      Map<String, RealDistribution> three =
+          Map.of(
+              "a", new UniformRealDistribution(100, 100 + 3 * width),
+              "b", new UniformRealDistribution(10, 10 + width),
+              "c", new UniformRealDistribution(50, 50 + width));
+      assertEquals(1, Importance.of(both).natvig(three).value("c"), 1e-9);
+    }
+  }
+
+  /** All alike: by symmetry each has the same share, however steep the wear. */
+  @Test
+  void natvig_takesLifetimesThatEndSteeply() {
+    for (RealDistribution steep :
+        List.of(new UniformRealDistribution(2, 5), new WeibullDistribution(20, 3))) {
+      Map<String, RealDistribution> lifetimes = Map.of("a", steep, "b", steep, "c", steep);
+      Ranking ranking = Importance.of(Structure.atLeast(2, "a", "b", "c")).natvig(lifetimes);
+      ranking.asMap().values().forEach(value -> assertEquals(1 / 3.0, value, 1e-10));
+    }
+  }
+
   @Test
   void badLifetimes_areNamed() {
     Importance pair = Importance.of(Structure.parallel("a", "b"));

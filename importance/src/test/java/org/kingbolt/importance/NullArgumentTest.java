@@ -30,6 +30,8 @@ class NullArgumentTest {
     refused("budget is null; it must be given", () -> at.fussellVesely(null));
     refused("budget is null; it must be given", () -> at.jointImportance(null));
     refused("components is null; name at least one", () -> at.interaction((String[]) null));
+    refused(
+        "component is null; give the name of one of the system's", () -> at.interaction("a", null));
     refused("changes are null; give a map from components to probabilities", () -> at.change(null));
     refused("probability of \"a\" is null", () -> at.change(Collections.singletonMap("a", null)));
     refused("groups are null; give a map from names to components", () -> at.groups(null));
