@@ -57,20 +57,36 @@ final class Compilation {
    * Both ends of the probability of a structure whose networks are replaced.
    *
    * @param relaxer says by what
+   * @param lessWorking whether by something that works less often, or more often
    * @param effort how many nodes one diagram may have, at least 1
    * @return in the order of {@link Composer#expectBetween}
    */
   static double[] between(
       Numbering numbering,
       NetworkRelaxer relaxer,
+      boolean lessWorking,
       double[] working,
       double[] failing,
       long effort,
       WorkMeter meter) {
     Composer composer = new Composer(0);
-    composer.relax(relaxer);
-    return within(
-        () -> expression(numbering, composer, meter).between(working, failing, effort, meter));
+    composer.relax(relaxer.begin(lessWorking));
+    double[] ends =
+        within(
+            () -> expression(numbering, composer, meter).between(working, failing, effort, meter));
+    if (!composer.hasGivenUp()) {
+      return ends;
+    }
+    Composer again = new Composer(0);
+    again.relax(relaxer.beginMonotone(lessWorking));
+    double[] others =
+        within(() -> expression(numbering, again, meter).between(working, failing, effort, meter));
+    return new double[] {
+      Math.max(ends[0], others[0]),
+      Math.min(ends[1], others[1]),
+      Math.min(ends[2], others[2]),
+      Math.max(ends[3], others[3])
+    };
   }
 
   /**

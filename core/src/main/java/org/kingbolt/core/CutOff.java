@@ -40,7 +40,8 @@ public final class CutOff {
 
   /**
    * Keeps the sets that are at least so probable: cut sets by the probability that all their
-   * components have failed, path sets by the probability that all work.
+   * components have failed, path sets by the probability that all work. A set whose product is
+   * short of the threshold by no more than rounding is kept: two of 0.7 reach 0.49.
    *
    * @param threshold the least probability that is wanted, above 0 and at most 1
    * @param p the components' probabilities

@@ -138,24 +138,30 @@ public final class Enclosure {
     double[] below = {less[0], less[1]};
     double[] above = {more[2], more[3]};
     exact = relaxer.isExact() && Arrays.equals(below, above);
-    if (exact || isSmaller(lower, below)) {
-      lower = below;
-    }
-    if (exact || isSmaller(above, upper)) {
-      upper = above;
-    }
+    lower = exact ? below : atLeast(lower, below);
+    upper = exact ? above : atMost(upper, above);
     evaluatedEffort = gateEffort;
     evaluatedChanges = relaxer.changes();
   }
 
   private double[] between(boolean lessWorking) {
     return Compilation.between(
-        numbering, relaxer.begin(lessWorking), working, failing, gateEffort, meter);
+        numbering, relaxer, lessWorking, working, failing, gateEffort, meter);
   }
 
-  /** Whether one probability is smaller than another, judged on the side that has more digits. */
-  private static boolean isSmaller(double[] a, double[] b) {
-    return b[1] < b[0] ? a[1] > b[1] : a[0] < b[0];
+  /** What two lower ends say together: both sides of each hold by themselves. */
+  private static double[] atLeast(double[] one, double[] other) {
+    double works = Math.max(one[0], other[0]);
+    double fails = Math.min(one[1], other[1]);
+    // the larger side loses no digits as 1 minus the smaller one
+    return works < fails
+        ? new double[] {works, Math.min(fails, 1 - Math.min(works, 0.5))}
+        : new double[] {Math.max(works, 1 - fails), fails};
+  }
+
+  private static double[] atMost(double[] one, double[] other) {
+    double[] inverted = atLeast(new double[] {one[1], one[0]}, new double[] {other[1], other[0]});
+    return new double[] {inverted[1], inverted[0]};
   }
 
   /**

@@ -26,6 +26,12 @@ public final class TruncatedSets implements Iterable<Set<String>> {
   /** Bounds are enlarged by this share to cover the rounding of their own sum. */
   private static final double ROUNDING = 1 + 1e-9;
 
+  /** Every factor and product, and the threshold, may be rounded by half a unit. */
+  private static final double ROUNDING_PER_MEMBER = 0x1p-52;
+
+  /** Products of probabilities above exp(-300) do not get below the range of a double. */
+  private static final double UNDERFLOW = 300;
+
   private final Structure structure;
   private final boolean paths;
   private final CutOff cutOff;
@@ -71,6 +77,7 @@ public final class TruncatedSets implements Iterable<Set<String>> {
     final TruncatedFamily family;
     private final CutOff cutOff;
     private final double[] failing;
+    private final boolean underflows;
 
     Search(
         Structure structure,
@@ -98,6 +105,7 @@ public final class TruncatedSets implements Iterable<Set<String>> {
         limit = -Math.log(cutOff.threshold());
       }
       weights.ifPresent(p -> fill(p, paths, working, failing));
+      this.underflows = smallness(working) + smallness(failing) > UNDERFLOW;
       this.family =
           new Truncation(numbering, cost, limit, failing, working, weights.isPresent(), meter)
               .family();
@@ -110,7 +118,15 @@ public final class TruncatedSets implements Iterable<Set<String>> {
       p.fill(components, paths ? failing : working, paths ? working : failing);
     }
 
-    /** Costs are rounded; whether a set is probable enough is decided by its product. */
+    /** How small the product of those that are not 0 is: minus its logarithm. */
+    private static double smallness(double[] probabilities) {
+      return Arrays.stream(probabilities).filter(p -> p > 0).map(p -> -Math.log(p)).sum();
+    }
+
+    /**
+     * Costs are rounded; whether a set is probable enough is decided by its product. Sets of equal
+     * probability stay together, whatever the order of their factors.
+     */
     private void keepProbable(Probabilities p, boolean paths) {
       double[] working = new double[components.size()];
       double[] decides = new double[components.size()];
@@ -119,7 +135,8 @@ public final class TruncatedSets implements Iterable<Set<String>> {
           family.sets.stream()
               .filter(
                   set -> {
-                    boolean kept = product(set, decides) >= cutOff.threshold();
+                    double rounding = 1 + set.members().length * ROUNDING_PER_MEMBER;
+                    boolean kept = product(set, decides) * rounding >= cutOff.threshold();
                     if (!kept) {
                       family.giveUp(product(set, failing));
                     }
@@ -141,7 +158,9 @@ public final class TruncatedSets implements Iterable<Set<String>> {
       if (cutOff.probabilities().isEmpty() && !family.complete) {
         bound = Math.min(bound, ROUNDING * larger());
       }
-      return family.complete ? 0 : Math.min(1, bound);
+      // what gets below the range of a double loses less than the least one, every time
+      double lost = underflows ? Double.MIN_NORMAL : 0;
+      return family.complete ? 0 : Math.min(1, bound + lost);
     }
 
     /** The probability that more components have failed than a set within the cut-off holds. */
@@ -231,7 +250,8 @@ public final class TruncatedSets implements Iterable<Set<String>> {
    * and others to work. Every state in question is in one of them, and the probability of each is
    * bounded by a product; gates add up the bounds of their parts. For a cut-off by size it is also
    * at most the probability that more components have failed than that size. The bound is enlarged
-   * by a billionth to cover rounding.
+   * by a billionth to cover rounding, and by 2.3e-308 where products of the probabilities may get
+   * below the range of a double.
    *
    * @param p the components' probabilities; components must fail independently
    * @param budget how much work it may cost

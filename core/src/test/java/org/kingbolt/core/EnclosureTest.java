@@ -8,11 +8,13 @@ import static org.junit.jupiter.api.Assertions.assertTrue;
 import java.math.BigDecimal;
 import java.time.Duration;
 import net.jqwik.api.Arbitrary;
+import net.jqwik.api.Assume;
 import net.jqwik.api.ForAll;
 import net.jqwik.api.Property;
 import net.jqwik.api.Provide;
 import net.jqwik.api.constraints.IntRange;
 import org.junit.jupiter.api.Test;
+import org.kingbolt.core.testing.NestedNetworks;
 import org.kingbolt.core.testing.RandomStructures;
 import org.kingbolt.core.testing.RandomStructures.Sample;
 
@@ -52,12 +54,35 @@ class EnclosureTest {
     assertEncloses(sample, p, effort);
   }
 
+  @Property(tries = 600)
+  void networksWithinNetworks_stayInside(
+      @ForAll @IntRange(min = 1, max = 3) int depth,
+      @ForAll long seed,
+      @ForAll @IntRange(min = 1, max = 500) int effort) {
+    NestedNetworks nested = new NestedNetworks(seed);
+    Structure structure = nested.structure(depth);
+    Assume.that(structure.components().size() <= 120);
+    Probabilities p = nested.probabilities(structure);
+    Probability exact = structure.compile().reliability(p);
+    narrowed(
+        structure, p, effort, new BigDecimal(exact.working()), new BigDecimal(exact.failing()));
+  }
+
   private static void assertEncloses(Sample sample, Probabilities p, int effort) {
-    BigDecimal works = sample.oracle().works(p);
-    BigDecimal fails = sample.oracle().fails(p);
-    Enclosure enclosure = Enclosure.of(sample.structure(), p, Budget.ofNodes(1_000_000), effort);
+    Enclosure enclosure =
+        narrowed(sample.structure(), p, effort, sample.oracle().works(p), sample.oracle().fails(p));
+    assertTrue(enclosure.isExact());
+    assertEquals(0, enclosure.lower().failing() - enclosure.upper().failing(), 1e-15);
+    assertFalse(enclosure.narrow());
+  }
+
+  /** Narrowed until it ends, and held against the right answer after every step. */
+  private static Enclosure narrowed(
+      Structure structure, Probabilities p, int effort, BigDecimal works, BigDecimal fails) {
+    Enclosure enclosure = Enclosure.of(structure, p, Budget.ofNodes(1_000_000), effort);
     boolean again = true;
     double width = Double.POSITIVE_INFINITY;
+    double otherWidth = Double.POSITIVE_INFINITY;
     while (again) {
       again = enclosure.narrow();
       Probability lower = enclosure.lower();
@@ -68,10 +93,11 @@ class EnclosureTest {
       assertNotBelow(lower.failing(), fails, enclosure);
       assertTrue(lower.failing() - upper.failing() <= width + 1e-15, "widened: " + enclosure);
       width = lower.failing() - upper.failing();
+      double working = upper.working() - lower.working();
+      assertTrue(working <= otherWidth + 1e-15, "widened: " + enclosure);
+      otherWidth = working;
     }
-    assertTrue(enclosure.isExact());
-    assertEquals(0, width, 1e-15);
-    assertFalse(enclosure.narrow());
+    return enclosure;
   }
 
   private static void assertNotAbove(double end, BigDecimal exact, Enclosure enclosure) {

@@ -28,6 +28,7 @@ public final class Composer {
   private int count;
   private int widest;
   private @Nullable NetworkRelaxer relaxer;
+  private boolean gaveUp;
 
   /** What each operator does. */
   private Operator[] operators = new Operator[16];
@@ -246,6 +247,29 @@ public final class Composer {
       parts[i] = part(expression, parts[i]);
     }
     return parts;
+  }
+
+  /** Whether all operators are. */
+  boolean isMonotone() {
+    for (int expression = 0; expression < count; expression++) {
+      if (!operators[expression].isMonotone()) {
+        return false;
+      }
+    }
+    return true;
+  }
+
+  void giveUp() {
+    gaveUp = true;
+  }
+
+  /**
+   * Tells whether some part was too large and not monotone, so that nothing is known of it.
+   *
+   * @return true after {@link #expectBetween} if {@link NetworkRelaxer#beginMonotone} may do better
+   */
+  public boolean hasGivenUp() {
+    return gaveUp;
   }
 
   int count() {

@@ -6,7 +6,7 @@ import java.util.Arrays;
  * The probability of an expression from below and from above, module by module like {@link
  * Expectation}: knots whose diagrams grow beyond a limit are bounded by {@link KnotBounds},
  * everything else is exact. A module whose parts are only bounded is evaluated at both ends of
- * them, as it is monotone.
+ * them, as it is monotone, or stands for something monotone that it is an end of.
  */
 final class ExpectationBounds {
 
@@ -99,6 +99,15 @@ final class ExpectationBounds {
   }
 
   private void bound(Knot knot, double[][] low, double[][] high) {
+    if (!knot.composer.isMonotone()) {
+      // these bounds rest on the association of increasing events
+      composer.giveUp();
+      lower.both[0] = 0;
+      lower.both[1] = 1;
+      upper.both[0] = 1;
+      upper.both[1] = 0;
+      return;
+    }
     KnotBounds bounds = new KnotBounds(knot.composer, knot.root, effort, meter);
     Bracket below = bounds.at(low[0], low[1]);
     Bracket above = Arrays.deepEquals(low, high) ? below : bounds.at(high[0], high[1]);

@@ -194,10 +194,21 @@ final class NetworkEnclosure {
    * Adds what stands for the network to an expression.
    *
    * @param lessWorking whether it is to work at most as often as the network, or at least as often
+   * @param monotone whether it must be monotone itself
    * @param dual whether the dual of the network is meant
    */
-  int express(Composer composer, boolean lessWorking, boolean dual, int[] parts, WorkMeter meter) {
+  int express(
+      Composer composer,
+      boolean lessWorking,
+      boolean monotone,
+      boolean dual,
+      int[] parts,
+      WorkMeter meter) {
     Means means = lessWorking ? less : more;
+    if (monotone && means == Means.LIKELY_STATES) {
+      boolean known = lessWorking ? growth.mostFails() < 1 : growth.leastFails() > 0;
+      means = known ? Means.EXCERPT : Means.NOTHING;
+    }
     return switch (means) {
       case NOTHING -> composer.operator(constant(lessWorking == dual), new int[0]);
       case EXCERPT -> {

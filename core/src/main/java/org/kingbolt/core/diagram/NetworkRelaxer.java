@@ -17,6 +17,7 @@ public final class NetworkRelaxer {
   private final double[] failing;
   private final List<NetworkEnclosure> networks = new ArrayList<>();
   private boolean lessWorking;
+  private boolean monotone;
   private int next;
   private boolean busy;
 
@@ -40,7 +41,21 @@ public final class NetworkRelaxer {
    */
   public NetworkRelaxer begin(boolean newLessWorking) {
     lessWorking = newLessWorking;
+    monotone = false;
     next = 0;
+    return this;
+  }
+
+  /**
+   * The same, with what is itself monotone only: a network that follows its likeliest states may
+   * fail where one of its parts works, while the network itself would not.
+   *
+   * @param newLessWorking as in {@link #begin}
+   * @return this
+   */
+  public NetworkRelaxer beginMonotone(boolean newLessWorking) {
+    begin(newLessWorking);
+    monotone = true;
     return this;
   }
 
@@ -97,7 +112,7 @@ public final class NetworkRelaxer {
     }
     busy = true;
     int expression =
-        networks.get(next++).express(composer, lessWorking != dual, dual, parts, meter);
+        networks.get(next++).express(composer, lessWorking != dual, monotone, dual, parts, meter);
     busy = false;
     return expression;
   }

@@ -27,6 +27,11 @@ public abstract class Operator {
     return true;
   }
 
+  /** Whether a slot that works never makes the operator fail. */
+  boolean isMonotone() {
+    return true;
+  }
+
   /** The template; the same object every time. */
   final Diagram template(WorkMeter meter) {
     Diagram made = template;
@@ -165,6 +170,12 @@ public abstract class Operator {
       return false;
     }
 
+    /** What is followed after one slot has failed may be cut off after it has worked. */
+    @Override
+    boolean isMonotone() {
+      return false;
+    }
+
     @Override
     Diagram make(WorkMeter meter) {
       return TruncatedSweep.template(rule, works, fails, most, otherwise, meter);
@@ -199,6 +210,11 @@ public abstract class Operator {
     @Override
     boolean isReduced() {
       return primal.isReduced();
+    }
+
+    @Override
+    boolean isMonotone() {
+      return primal.isMonotone();
     }
 
     @Override
