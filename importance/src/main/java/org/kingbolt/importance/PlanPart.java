@@ -15,8 +15,8 @@ import java.util.BitSet;
 @SuppressWarnings("ArrayRecordComponent")
 record PlanPart(double[] failing, double[] working, long[][] cost, BitSet[] chosen) {
 
-  private static final int MOST_PAIRS = 1 << 18;
-  private static final int MOST = 2048;
+  private static final int MOST_PAIRS = 1 << 14;
+  private static final int MOST = 512;
 
   int size() {
     return failing.length;

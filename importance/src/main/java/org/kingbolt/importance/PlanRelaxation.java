@@ -23,7 +23,6 @@ import java.util.Arrays;
 final class PlanRelaxation {
 
   private static final double SHARE = 1e-9;
-  private static final int HALVINGS = 22;
   private static final int NEWTON = 12;
   private static final double NONE = Double.POSITIVE_INFINITY;
 
@@ -53,10 +52,7 @@ final class PlanRelaxation {
   final int[] first;
   final int[] last;
   final double[] price;
-  private final double[] tangentPrice;
-
-  /** By part: what its alternative of least priced tangent is, at the tangent's prices. */
-  final int[] choice;
+  private final PlanTangent tangent;
 
   PlanRelaxation(PlanWeb web, long[] limits, double floor) {
     this.web = web;
@@ -88,9 +84,8 @@ final class PlanRelaxation {
     worksShare = new double[levels];
     first = new int[levels];
     last = new int[levels];
-    choice = new int[levels];
     price = new double[limits.length];
-    tangentPrice = new double[limits.length];
+    tangent = new PlanTangent(cost, limits, first, last);
   }
 
   /** Makes the state fit the mixtures, which have been changed. */
@@ -192,7 +187,7 @@ final class PlanRelaxation {
     double least = NONE;
     double most = -NONE;
     for (int i = first[at]; i <= last[at]; i++) {
-      double term = (a * logQ[at][i] + b * logP[at][i]) / fails + priced(price, at, i);
+      double term = (a * logQ[at][i] + b * logP[at][i]) / fails + tangent.priced(price, at, i);
       if (term < least) {
         least = term;
         best = i;
@@ -207,7 +202,7 @@ final class PlanRelaxation {
     }
     double dq = logQ[at][best] - logQ[at][worst];
     double dp = logP[at][best] - logP[at][worst];
-    double dc = priced(price, at, best) - priced(price, at, worst);
+    double dc = tangent.priced(price, at, best) - tangent.priced(price, at, worst);
     double t = lineMinimum(a, b, rest, dq, dp, dc, shares[worst]);
     shares[best] += t;
     shares[worst] -= t;
@@ -250,14 +245,6 @@ final class PlanRelaxation {
     return t;
   }
 
-  private double priced(double[] prices, int at, int i) {
-    double sum = 0;
-    for (int r = 0; r < prices.length; r++) {
-      sum += prices[r] == 0 ? 0 : prices[r] * cost[at][r][i];
-    }
-    return sum;
-  }
-
   /** Raises prices of what the mixtures overspend, lowers those of what they leave. */
   void reprice(double rate) {
     for (int r = 0; r < price.length; r++) {
@@ -268,7 +255,7 @@ final class PlanRelaxation {
         }
       }
       double off = (spent - limits[r]) / Math.max(1, limits[r]);
-      double start = tangentPrice[r] > 0 ? tangentPrice[r] : 1e-3 / Math.max(1.0, limits[r]);
+      double start = tangent.price(r) > 0 ? tangent.price(r) : 1e-3 / (1.0 + limits[r]);
       price[r] = price[r] > 0 ? price[r] : start;
       price[r] *= Math.exp(rate * Math.max(-1, Math.min(1, off)));
     }
@@ -278,83 +265,21 @@ final class PlanRelaxation {
   double bound() {
     up(true);
     down(false);
-    System.arraycopy(price, 0, tangentPrice, 0, price.length);
-    double best = -NONE;
-    for (int round = 0; round < (limits.length == 1 ? 1 : 2); round++) {
-      for (int r = 0; r < limits.length; r++) {
-        best = Math.max(best, priceOut(r));
+    for (int at = 0; at < levels; at++) {
+      for (int i = first[at]; i <= last[at]; i++) {
+        double term =
+            failedShare[at] * (logQ[at][i] - u[at]) + worksShare[at] * (logP[at][i] - v[at]);
+        tangent.put(at, i, term);
       }
     }
-    double log = Math.log(fails) + best;
+    double log = Math.log(fails) + tangent.least(price);
     double raised = Math.log(floors);
     return log > raised ? log + Math.log1p(-Math.exp(raised - log)) : -NONE;
   }
 
-  private double priceOut(int r) {
-    double given = tangentPrice[r];
-    tangentPrice[r] = 0;
-    if (spent(r) <= limits[r]) {
-      return tangent();
-    }
-    double low = 0;
-    double high = given > 0 ? given : 1 / (1.0 + limits[r]);
-    tangentPrice[r] = high;
-    while (spent(r) > limits[r] && high < 1e30) {
-      low = high;
-      high *= 1.5;
-      tangentPrice[r] = high;
-    }
-    for (int i = 0; i < HALVINGS && high - low > 1e-6 * high; i++) {
-      double middle = i == 0 && low == 0 ? high * 0.8 : (low + high) / 2;
-      tangentPrice[r] = middle;
-      if (spent(r) > limits[r]) {
-        low = middle;
-      } else {
-        high = middle;
-      }
-    }
-    tangentPrice[r] = high;
-    return tangent();
-  }
-
-  /** What the choices of the least priced tangent cost. */
-  private double spent(int r) {
-    double sum = 0;
-    for (int at = 0; at < levels; at++) {
-      sum += cost[at][r][cheapest(at)];
-    }
-    return sum;
-  }
-
-  private int cheapest(int at) {
-    int best = first[at];
-    double least = NONE;
-    for (int i = first[at]; i <= last[at]; i++) {
-      double term = term(at, i);
-      if (term < least) {
-        least = term;
-        best = i;
-      }
-    }
-    return best;
-  }
-
-  private double term(int at, int i) {
-    return failedShare[at] * (logQ[at][i] - u[at])
-        + worksShare[at] * (logP[at][i] - v[at])
-        + priced(tangentPrice, at, i);
-  }
-
-  private double tangent() {
-    double sum = 0;
-    for (int at = 0; at < levels; at++) {
-      choice[at] = cheapest(at);
-      sum += term(at, choice[at]);
-    }
-    for (int r = 0; r < limits.length; r++) {
-      sum -= tangentPrice[r] == 0 ? 0 : tangentPrice[r] * limits[r];
-    }
-    return sum;
+  /** By part: the alternative that the last bound's tangent prefers. */
+  int[] choices() {
+    return tangent.choices();
   }
 
   /** Takes away the outermost alternatives with which the last bound would be above a cutoff. */
@@ -363,11 +288,11 @@ final class PlanRelaxation {
     for (int at = 0; at < levels; at++) {
       int from = first[at];
       int to = last[at];
-      double least = from < to ? term(at, cheapest(at)) : 0;
-      while (from < to && bound + term(at, from) - least > cutoff) {
+      double least = from < to ? tangent.term(at, tangent.cheapest(at)) : 0;
+      while (from < to && bound + tangent.term(at, from) - least > cutoff) {
         from++;
       }
-      while (from < to && bound + term(at, to) - least > cutoff) {
+      while (from < to && bound + tangent.term(at, to) - least > cutoff) {
         to--;
       }
       if (to - from < last[at] - first[at]) {
@@ -409,7 +334,7 @@ final class PlanRelaxation {
     }
     double mean = 0;
     for (int i = first[at]; i <= last[at]; i++) {
-      mean += mix[at][i] > 0 ? mix[at][i] * priced(price, at, i) : 0;
+      mean += mix[at][i] > 0 ? mix[at][i] * tangent.priced(price, at, i) : 0;
     }
     int middle = middle(at);
     return Math.max(0, added(at, middle, mean)) * Math.max(0, added(at, middle + 1, mean));
@@ -419,7 +344,7 @@ final class PlanRelaxation {
     double more =
         failedShare[at] * Math.expm1(logQ[at][i] - u[at])
             + worksShare[at] * Math.expm1(logP[at][i] - v[at]);
-    return Math.log1p(more) + priced(price, at, i) - mean;
+    return Math.log1p(more) + tangent.priced(price, at, i) - mean;
   }
 
   /** The last alternative that is at least as bad as the mixture: where to divide. */

@@ -144,7 +144,7 @@ final class PlanRounding {
       if (more > left[r]) {
         return -1;
       }
-      price += Math.max(0, more) / Math.max(1.0, limits[r]);
+      price += Math.max(0, more) / (1.0 + limits[r]);
     }
     return price;
   }

@@ -13,7 +13,9 @@ import org.kingbolt.core.diagram.WorkMeter;
 
 /**
  * The search for one answer: sweeps with more and more room, until nothing had to be left out, the
- * proved gap is small enough, or the budget is used up.
+ * proved gap is small enough, or the budget is used up. For the best plan, a branch and bound with
+ * a convex relaxation takes over after the first of them, where no decision matters for more than
+ * one variable.
  */
 final class PlanSearch {
 
@@ -26,10 +28,10 @@ final class PlanSearch {
    */
   record Answer(PlanFound plan, double bound, boolean proved) {}
 
-  private static final int FIRST_ROOM = 256;
+  private static final int FIRST_ROOM = 32;
   private static final int GROWTH = 8;
 
-  /** Where exactness is asked for, sweeps get so much room before the tree takes over. */
+  /** Without an allowed gap, sweeps get so much room before the tree is tried. */
   private static final int EXACT_ROOM = 1 << 8;
 
   private static final int MOST_ROOM = 1 << 26;
@@ -158,8 +160,7 @@ final class PlanSearch {
     Evaluator evaluator = model.system().evaluator();
     double log = Math.log(best.fails());
     PlanTree tree =
-        new PlanTree(
-            web.get(), goal.limits(), log, chosen -> offer(evaluator, chosen), gap, meter);
+        new PlanTree(web.get(), goal.limits(), log, chosen -> offer(evaluator, chosen), gap, meter);
     try {
       tree.run(proved);
     } finally {

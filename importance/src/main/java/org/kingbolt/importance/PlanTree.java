@@ -58,7 +58,10 @@ final class PlanTree {
 
   private static final int ROUNDS_AT_ROOT = 40;
   private static final int ROUNDS = 6;
+
+  /** Rounds end when so many more of what the last one gained would not close a set. */
   private static final double STALL = 10;
+
   private static final double SAME = 1e-12;
   private static final double ROUNDING = 1e-6;
 
@@ -217,7 +220,7 @@ final class PlanTree {
   }
 
   private void round(boolean thorough) {
-    int[] choice = relaxation.choice.clone();
+    int[] choice = relaxation.choices();
     for (int at = 0; at < choice.length; at++) {
       choice[at] = Math.max(relaxation.first[at], Math.min(relaxation.last[at], choice[at]));
     }
