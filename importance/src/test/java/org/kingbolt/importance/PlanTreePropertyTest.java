@@ -67,7 +67,7 @@ class PlanTreePropertyTest {
     return PlanWeb.of(model, steps, order, menus, limits, meter);
   }
 
-  @Property(tries = 400, shrinking = ShrinkingMode.OFF)
+  @Property(tries = 1000, shrinking = ShrinkingMode.OFF)
   void relaxation_isNoWorseThanTheBest(
       @ForAll("plans") RandomPlan random, @ForAll("tenths") double budget, @ForAll long seed) {
     PlanModel model = random.plan().model();
@@ -103,7 +103,7 @@ class PlanTreePropertyTest {
     }
   }
 
-  @Property(tries = 400, shrinking = ShrinkingMode.OFF)
+  @Property(tries = 1000, shrinking = ShrinkingMode.OFF)
   void tree_findsTheBestOfAll(
       @ForAll("plans") RandomPlan random,
       @ForAll("tenths") double budget,
