@@ -72,12 +72,9 @@ class PlanTreePropertyTest {
       @ForAll("plans") RandomPlan random, @ForAll("tenths") double budget, @ForAll long seed) {
     PlanModel model = random.plan().model();
     long[] limits = limits(model, budget);
-    double[] failing = failing(random, model, limits);
-    if (failing.length == 0 || failing[0] == 0) {
-      return;
-    }
     Optional<PlanWeb> web = web(model, limits);
-    if (web.isEmpty()) {
+    double[] failing = web.isEmpty() ? new double[0] : failing(random, model, limits);
+    if (failing.length == 0 || failing[0] == 0) {
       return;
     }
     double best = Math.log(failing[0]);
@@ -110,9 +107,9 @@ class PlanTreePropertyTest {
       @ForAll("gaps") double gap) {
     PlanModel model = random.plan().model();
     long[] limits = limits(model, budget);
-    double[] failing = failing(random, model, limits);
-    Optional<PlanWeb> web = failing.length == 0 ? Optional.empty() : web(model, limits);
-    if (web.isEmpty()) {
+    Optional<PlanWeb> web = web(model, limits);
+    double[] failing = web.isEmpty() ? new double[0] : failing(random, model, limits);
+    if (failing.length == 0) {
       return;
     }
     double[] best = {Math.log(failing[failing.length - 1])};
