@@ -23,10 +23,11 @@ import org.kingbolt.core.Structure;
  * partial choice is dropped only when another one is proved to be at least as good whatever follows
  * (the reliability increases in each component's, and is a sum of products of both sides), or when
  * a bound proves that it cannot lead to an answer (monotonicity, and Gibbs' inequality with
- * Lagrange multipliers for the resources). Cost: for systems whose parts share no components about
- * as for a knapsack problem; with shared components it grows with the width of the diagram, and may
- * be exponential. A search that the {@link Budget} ends returns the best found, and how far it can
- * be from the best there is.
+ * Lagrange multipliers for the resources). Larger questions for the best plan, if each option
+ * changes one component only, are divided further by a branch and bound whose relaxation is a
+ * convex programme. Cost: for systems whose parts share no components about as for a knapsack
+ * problem; with shared components it grows with the diagram, and may be exponential. A search that
+ * the {@link Budget} ends returns the best found, and how far it can be from the best there is.
  *
  * <p>Components fail independently, also new ones. Results support a qualified engineer's judgement
  * and never replace codes, standards and licensed practice.
@@ -43,7 +44,8 @@ import org.kingbolt.core.Structure;
  * }</pre>
  *
  * <p>Sources: Kettelle, Oper. Res. 10 (1962) 249, for undominated sequences of allocations;
- * Tillman, Hwang &amp; Kuo, Optimization of Systems Reliability, 1980.
+ * Tillman, Hwang &amp; Kuo, Optimization of Systems Reliability, 1980; Duffin, Peterson &amp;
+ * Zener, Geometric Programming, 1967, for the convex form (from memory).
  */
 public final class ImprovementPlan {
 
@@ -250,7 +252,11 @@ public final class ImprovementPlan {
   }
 
   private PlanQuestion question() {
-    return new PlanQuestion(PlanModeler.model(description, budget), limits, budget, gap);
+    return new PlanQuestion(model(), limits, budget, gap);
+  }
+
+  PlanModel model() {
+    return PlanModeler.model(description, budget);
   }
 
   /**

@@ -1,15 +1,21 @@
 package org.kingbolt.importance;
 
 import java.util.Arrays;
+import java.util.BitSet;
 import java.util.List;
+import java.util.Optional;
 import org.jspecify.annotations.Nullable;
 import org.kingbolt.core.Budget;
 import org.kingbolt.core.BudgetExceededException;
+import org.kingbolt.core.Evaluator;
+import org.kingbolt.core.Probability;
 import org.kingbolt.core.diagram.WorkMeter;
 
 /**
  * The search for one answer: sweeps with more and more room, until nothing had to be left out, the
- * proved gap is small enough, or the budget is used up.
+ * proved gap is small enough, or the budget is used up. For the best plan, a branch and bound with
+ * a convex relaxation takes over after the first of them, where no decision matters for more than
+ * one variable.
  */
 final class PlanSearch {
 
@@ -22,14 +28,19 @@ final class PlanSearch {
    */
   record Answer(PlanFound plan, double bound, boolean proved) {}
 
-  private static final int FIRST_ROOM = 256;
+  private static final int FIRST_ROOM = 32;
   private static final int GROWTH = 8;
+
+  /** Without an allowed gap, sweeps get so much room before the tree is tried. */
+  private static final int EXACT_ROOM = 1 << 8;
+
   private static final int MOST_ROOM = 1 << 26;
 
   private final PlanModel model;
   private final double gap;
   private final WorkMeter meter;
   private final PlanSteps steps;
+  private final PlanOrder order;
   private final PlanMenus menus;
   private final PlanReach reach;
   private final PlanAlternative[][] relaxed;
@@ -41,7 +52,7 @@ final class PlanSearch {
     this.gap = gap;
     this.meter = meter;
     this.steps = new PlanSteps(model.system().diagram(), meter);
-    PlanOrder order = new PlanOrder(model, steps);
+    this.order = new PlanOrder(model, steps);
     this.menus = new PlanMenus(model, steps, order, meter);
     this.reach = new PlanReach(steps, PlanRange.all(model, steps));
     this.relaxed = new PlanAlternative[steps.count()][];
@@ -128,12 +139,41 @@ final class PlanSearch {
         if (whole || reached - proved <= Math.log1p(gap)) {
           return new Answer(best, whole ? reached : proved, whole || reached <= proved);
         }
+        if ((gap > 0 || room >= EXACT_ROOM) && climb(goal)) {
+          double log = Math.log(best.fails());
+          return new Answer(best, gap == 0 ? log : Math.min(proved, log), gap == 0);
+        }
       }
     } catch (BudgetExceededException used) {
       refuse(used);
     }
     PlanFound found = java.util.Objects.requireNonNull(best);
     return new Answer(found, Math.min(proved, Math.log(found.fails())), false);
+  }
+
+  /** Branch and bound to the end, where the plan allows it; false where not. */
+  private boolean climb(PlanGoal goal) {
+    Optional<PlanWeb> web = PlanWeb.of(model, steps, order, menus, goal.limits(), meter);
+    if (best == null || web.isEmpty()) {
+      return false;
+    }
+    Evaluator evaluator = model.system().evaluator();
+    double log = Math.log(best.fails());
+    PlanTree tree =
+        new PlanTree(web.get(), goal.limits(), log, chosen -> offer(evaluator, chosen), gap, meter);
+    try {
+      tree.run(proved);
+    } finally {
+      proved = Math.max(proved, tree.proved());
+    }
+    return true;
+  }
+
+  private double offer(Evaluator evaluator, BitSet chosen) {
+    Probability p = model.reliability(evaluator, chosen);
+    PlanFound found = new PlanFound(chosen, model.cost(chosen), p.working(), p.failing());
+    offer(found);
+    return Math.log(best == null ? found.fails() : best.fails());
   }
 
   /** With a gap allowed, plans are of interest only if they are better by half of it. */

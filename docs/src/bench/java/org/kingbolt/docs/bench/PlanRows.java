@@ -46,6 +46,8 @@ final class PlanRows {
   private static final int HEAVIEST = 191;
   private static final int MOST_UNITS = 8;
   private static final int OPTIONS = 200;
+  private static final int SUBSYSTEMS = 13;
+  private static final int GRID = 6;
   private static final long SEED = 4;
 
   private PlanRows() {}
@@ -54,8 +56,10 @@ final class PlanRows {
     return List.of(
         new Workload(
             "redundancy allocation: 33 optima", Effort.LONG, List.of("loop"), PlanRows::fyffe),
+        new Workload("200 options, shared gates: to 1 %", Effort.LONG, List.of(), PlanRows::gates),
         new Workload(
-            "200 options, shared gates: to 1 %", Effort.LONG, List.of(), PlanRows::options));
+            "200 options, shared supports: to 1 %", Effort.LONG, List.of(), PlanRows::plant),
+        new Workload("200 options, 6x6 grid: to 1 %", Effort.LONG, List.of(), PlanRows::grid));
   }
 
   /** The peer is the dynamic programme over cost and weight in plain loops, once for all. */
@@ -140,9 +144,36 @@ final class PlanRows {
     }
   }
 
-  /** Gates of which a fifth of the leaves repeat a component; replacements, spares, tests. */
-  private static Prepared options() {
-    Structure structure = new NestedGates(14, 60, 12, SEED).structure();
+  /** Gates of which a fifth of the leaves repeat a component. */
+  private static Prepared gates() {
+    return options(new NestedGates(14, 60, 12, SEED).structure());
+  }
+
+  /** Two trains of pump and valve in each subsystem; buses, cooling and controls in common. */
+  private static Prepared plant() {
+    Random random = new Random(SEED);
+    List<Structure> subsystems = new ArrayList<>();
+    for (int i = 0; i < SUBSYSTEMS; i++) {
+      List<Structure> trains = new ArrayList<>();
+      for (int train = 0; train < 2; train++) {
+        trains.add(
+            Structure.series(
+                "pump " + i + "." + train,
+                "valve " + i + "." + train,
+                "bus " + (2 * random.nextInt(2) + train),
+                (random.nextBoolean() ? "cooling " : "control ") + train));
+      }
+      subsystems.add(Structure.parallel(trains));
+    }
+    return options(Structure.series(subsystems));
+  }
+
+  private static Prepared grid() {
+    return options(Inputs.grid(GRID, GRID).connecting(Inputs.corners(GRID, GRID)));
+  }
+
+  /** Replacements, spares, tests. */
+  private static Prepared options(Structure structure) {
     Random random = new Random(SEED);
     List<String> components = structure.components();
     double[] failing = Inputs.failing(components.size(), 0.005, 0.1);
