@@ -46,6 +46,25 @@ final class SetTable {
   }
 
   private static int width(String text) {
-    return text.codePointCount(0, text.length());
+    return text.codePoints().map(SetTable::columns).sum();
+  }
+
+  /** As in wcwidth of POSIX: marks take no column of a terminal, East Asian signs take two. */
+  private static int columns(int codePoint) {
+    return switch (Character.getType(codePoint)) {
+      case Character.NON_SPACING_MARK, Character.ENCLOSING_MARK, Character.FORMAT -> 0;
+      default -> isWide(codePoint) ? 2 : 1;
+    };
+  }
+
+  private static boolean isWide(int at) {
+    return (at >= 0x1100 && at <= 0x115f)
+        || (at >= 0x2e80 && at <= 0xa4cf)
+        || (at >= 0xac00 && at <= 0xd7a3)
+        || (at >= 0xf900 && at <= 0xfaff)
+        || (at >= 0xff00 && at <= 0xff60)
+        || (at >= 0xffe0 && at <= 0xffe6)
+        || (at >= 0x1f300 && at <= 0x1faff)
+        || (at >= 0x20000 && at <= 0x3fffd);
   }
 }

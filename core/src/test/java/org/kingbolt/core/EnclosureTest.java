@@ -147,6 +147,30 @@ class EnclosureTest {
     assertTrue(interrupted.isExact());
   }
 
+  /** Without a pass over all that is below each network, which takes minutes. */
+  @Test
+  void manySmallNetworks_areReadAtOnce() {
+    Structure chain = Structure.component("x");
+    for (int i = 0; i < 25_000; i++) {
+      chain =
+          Structure.network()
+              .link(chain, "a", "b")
+              .link("c" + i, "b", "t")
+              .link("l" + i, "a", "k")
+              .link("n" + i, "k", "t")
+              .link("o" + i, "k", "b")
+              .connecting("a", "t");
+    }
+    Probabilities p = Probabilities.all(Probability.failing(0.001));
+    Budget budget = Budget.ofHeap().withTime(Duration.ofSeconds(25));
+    Enclosure enclosure = Enclosure.of(chain, p, budget);
+    while (enclosure.narrow()) {
+      assertFalse(enclosure.isExact());
+    }
+    assertTrue(enclosure.isExact());
+    assertEquals(chain.reliability(p).failing(), enclosure.upper().failing(), 1e-15);
+  }
+
   private static Structure grid(int side) {
     NetworkBuilder grid = Structure.network();
     for (int row = 0; row < side; row++) {

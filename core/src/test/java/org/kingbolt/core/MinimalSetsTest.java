@@ -124,6 +124,21 @@ class MinimalSetsTest {
     assertTrue(cuts.table(p, 1).endsWith("49.75%\nand 2 more\n"), cuts.table(p, 1));
   }
 
+  /** Wide signs take two columns of a terminal, combining marks none. */
+  @Test
+  void table_isAlignedForWideSignsAndMarks() {
+    MinimalSets cuts =
+        Structure.series("\u6bcd\u7dda", "ke\u0301y", "relay").compile().minimalCutSets();
+    String expected =
+        """
+        size  components  probability   share
+           1  \u6bcd\u7dda         1.0000e-02  33.33%
+           1  ke\u0301y          1.0000e-02  33.33%
+           1  relay        1.0000e-02  33.33%
+        """;
+    assertEquals(expected, cuts.table(Probabilities.all(Probability.failing(0.01)), 3));
+  }
+
   @Test
   void structuresWithoutComponents_haveNoSetsOrTheEmptyOne() {
     Structure never = Structure.component("a").givenFailed("a");

@@ -2,6 +2,7 @@ package org.kingbolt.core.diagram;
 
 import java.util.ArrayList;
 import java.util.List;
+import org.jspecify.annotations.Nullable;
 
 /**
  * Replaces the networks of a structure that are too wide to sweep by others that can be worked out,
@@ -20,6 +21,9 @@ public final class NetworkRelaxer {
   private boolean monotone;
   private int next;
   private boolean busy;
+
+  /** Of the expression begun last, as far as networks had to be made known. */
+  private @Nullable Estimates estimates;
 
   /**
    * Starts with nothing known of any network.
@@ -42,6 +46,7 @@ public final class NetworkRelaxer {
   public NetworkRelaxer begin(boolean newLessWorking) {
     lessWorking = newLessWorking;
     monotone = false;
+    estimates = null;
     next = 0;
     return this;
   }
@@ -104,9 +109,13 @@ public final class NetworkRelaxer {
 
   int sweep(Composer composer, NetworkProblem network, boolean dual, int[] parts, WorkMeter meter) {
     if (next == networks.size()) {
-      Estimates estimates = new Estimates(composer, working, failing, meter);
-      double[] works = estimates.works(parts);
-      double[] fails = estimates.fails(parts);
+      Estimates known = estimates;
+      if (known == null) {
+        known = new Estimates(composer, working, failing, meter);
+        estimates = known;
+      }
+      double[] works = known.works(parts);
+      double[] fails = known.fails(parts);
       networks.add(
           new NetworkEnclosure(network, dual ? fails : works, dual ? works : fails, meter));
     }
