@@ -152,6 +152,14 @@ final class Truncation {
 
   /** Whether the parts of an operator have no component in common. */
   private boolean isApart(int number) {
+    int tied = 0;
+    for (int slot = 0; slot < slots(number); slot++) {
+      int part = numbering.part(number, slot);
+      tied += shares[part] || uses[part] > 1 ? 1 : 0;
+    }
+    if (tied < 2) {
+      return true;
+    }
     Map<String, Integer> slotOf = new HashMap<>();
     List<Structure> parts = numbering.structure(number).parts();
     for (int slot = 0; slot < parts.size(); slot++) {

@@ -5,6 +5,7 @@ import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
 
 import java.math.BigInteger;
+import java.time.Duration;
 import java.util.ArrayList;
 import java.util.Arrays;
 import java.util.HashSet;
@@ -148,6 +149,25 @@ class MinimalSetsTest {
     assertEquals(List.of(), always.minimalCutSets(CutOff.size(1)).stream().toList());
     assertEquals(List.of(Set.of()), always.minimalPathSets(CutOff.size(1)).stream().toList());
     assertTrue(always.minimalPathSets(CutOff.size(1)).isComplete());
+  }
+
+  /** One component stands at both ends, so that what is below each network is looked at. */
+  @Test
+  void deepNetworksThatShare_areSearchedInTime() {
+    Structure chain = Structure.component("s");
+    for (int i = 0; i < 30_000; i++) {
+      chain =
+          Structure.network()
+              .link(chain, "a", "b")
+              .link("c" + i, "b", "t")
+              .link("d" + i, "a", "t")
+              .connecting("a", "t");
+    }
+    Structure whole = Structure.series(chain, Structure.parallel("s", "other"));
+    Budget budget = Budget.ofHeap().withTime(Duration.ofSeconds(20));
+    assertEquals(
+        Set.of(Set.of("s", "other"), Set.of("c29999", "d29999")),
+        new HashSet<>(whole.minimalCutSets(CutOff.size(2), budget).stream().toList()));
   }
 
   @Test
