@@ -72,6 +72,22 @@ public final class ImprovementResult {
   }
 
   /**
+   * What they cost together, where there is one resource.
+   *
+   * @return the sum
+   * @throws IllegalStateException if there are several resources
+   */
+  public double cost() {
+    if (costs.size() > 1) {
+      throw new IllegalStateException(
+          "costs are in several resources, "
+              + PlanCheck.listed(costs.keySet())
+              + "; name one of these: cost(name)");
+    }
+    return costs.values().stream().mapToDouble(Double::doubleValue).sum();
+  }
+
+  /**
    * What they cost together in one resource.
    *
    * @param name the resource

@@ -57,6 +57,7 @@ class ImprovementPlanTest {
     ImprovementResult result = station().bestWithin(15);
     assertEquals(List.of("new intake", "third pump"), result.options());
     assertEquals(15, result.cost("cost"));
+    assertEquals(15, result.cost());
     assertEquals(0.99 * 0.998, result.reliability().working(), 1e-15);
     assertEquals(
         List.of("new intake", "third pump"),
