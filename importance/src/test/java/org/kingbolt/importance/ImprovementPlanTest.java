@@ -53,6 +53,22 @@ class ImprovementPlanTest {
   }
 
   @Test
+  void cost_withoutAName_isRefusedForSeveralResources() {
+    ImprovementResult result =
+        ImprovementPlan.of(STATION)
+            .given(P)
+            .with(
+                option("new intake")
+                    .replacing("intake", 0.99)
+                    .costing("kEUR", 1)
+                    .costing("days", 2))
+            .bestWithin(Map.of("kEUR", 1.0, "days", 2.0));
+    IllegalStateException refused = assertThrows(IllegalStateException.class, result::cost);
+    assertTrue(refused.getMessage().contains("name one of these"), refused::getMessage);
+    assertEquals(2, result.cost("days"));
+  }
+
+  @Test
   void bestWithin_choosesAndExplains() {
     ImprovementResult result = station().bestWithin(15);
     assertEquals(List.of("new intake", "third pump"), result.options());
