@@ -4,6 +4,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTimeout;
 import static org.junit.jupiter.api.Assertions.assertTrue;
+import static org.kingbolt.core.published.Families.corners;
 
 import java.math.BigDecimal;
 import java.time.Duration;
@@ -17,10 +18,8 @@ import net.jqwik.api.constraints.IntRange;
 import org.junit.jupiter.api.Test;
 import org.kingbolt.core.Budget;
 import org.kingbolt.core.BudgetExceededException;
-import org.kingbolt.core.NetworkBuilder;
 import org.kingbolt.core.Probabilities;
 import org.kingbolt.core.Probability;
-import org.kingbolt.core.Structure;
 import org.kingbolt.core.testing.RandomStructures;
 import org.kingbolt.core.testing.RandomStructures.Sample;
 
@@ -67,7 +66,7 @@ class CertifiedIntervalTest {
   /** 870 nodes and 1,740 links are far too many to sweep. */
   @Test
   void largeGrid_isEnclosedToOnePercent() {
-    BoundsAtProbabilities bounds = Bounds.of(grid(30)).given(failing(0.01));
+    BoundsAtProbabilities bounds = Bounds.of(corners(30)).given(failing(0.01));
     Interval interval = bounds.within(Budget.ofNodes(4_000_000), 0.01);
     assertTrue(interval.relativeWidthFailing() <= 0.01, interval::toString);
     // the two corner cuts, and the cuts of three links around them, nothing else to a part in 10^4
@@ -78,7 +77,7 @@ class CertifiedIntervalTest {
   /** As a sweep over the grid and one over its planar dual agree; our own figures. */
   @Test
   void smallGrid_isWorkedOut() {
-    Interval interval = Bounds.of(grid(6)).given(Probabilities.all(0.9)).within(Budget.ofHeap());
+    Interval interval = Bounds.of(corners(6)).given(Probabilities.all(0.9)).within(Budget.ofHeap());
     assertEquals(0.97564499528516, interval.lower().working(), 1e-14);
     assertEquals("exact", interval.method());
     assertTrue(interval.relativeWidthFailing() < 1e-12);
@@ -88,7 +87,7 @@ class CertifiedIntervalTest {
   void watcher_endsTheWork() {
     List<Interval> seen = new ArrayList<>();
     Interval interval =
-        Bounds.of(grid(30))
+        Bounds.of(corners(30))
             .given(failing(0.1))
             .within(
                 Budget.ofHeap(),
@@ -105,14 +104,14 @@ class CertifiedIntervalTest {
   @Test
   void time_endsTheWorkWithAnInterval() {
     Budget budget = Budget.ofTime(Duration.ofMillis(300));
-    BoundsAtProbabilities bounds = Bounds.of(grid(40)).given(failing(0.1));
+    BoundsAtProbabilities bounds = Bounds.of(corners(40)).given(failing(0.1));
     Interval interval = assertTimeout(Duration.ofSeconds(20), () -> bounds.within(budget));
     assertTrue(interval.upper().failing() < 0.025);
   }
 
   @Test
   void interrupt_isHeeded() {
-    BoundsAtProbabilities bounds = Bounds.of(grid(30)).given(failing(0.1));
+    BoundsAtProbabilities bounds = Bounds.of(corners(30)).given(failing(0.1));
     Thread.currentThread().interrupt();
     try {
       assertEquals(
@@ -126,7 +125,7 @@ class CertifiedIntervalTest {
 
   @Test
   void badWidth_isRefused() {
-    BoundsAtProbabilities bounds = Bounds.of(grid(3)).given(failing(0.1));
+    BoundsAtProbabilities bounds = Bounds.of(corners(3)).given(failing(0.1));
     for (double width : new double[] {-0.1, Double.NaN}) {
       IllegalArgumentException refused =
           assertThrows(IllegalArgumentException.class, () -> bounds.within(Budget.ofHeap(), width));
@@ -136,21 +135,5 @@ class CertifiedIntervalTest {
 
   private static Probabilities failing(double q) {
     return Probabilities.all(Probability.failing(q));
-  }
-
-  private static Structure grid(int side) {
-    NetworkBuilder grid = Structure.network();
-    for (int row = 0; row < side; row++) {
-      for (int column = 0; column < side; column++) {
-        String here = row + "," + column;
-        if (column + 1 < side) {
-          grid = grid.link("h" + here, here, row + "," + (column + 1));
-        }
-        if (row + 1 < side) {
-          grid = grid.link("v" + here, here, (row + 1) + "," + column);
-        }
-      }
-    }
-    return grid.connecting("0,0", (side - 1) + "," + (side - 1));
   }
 }

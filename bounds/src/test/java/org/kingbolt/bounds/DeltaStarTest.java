@@ -3,6 +3,7 @@ package org.kingbolt.bounds;
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
+import static org.kingbolt.core.published.Families.corners;
 
 import java.util.Random;
 import java.util.SplittableRandom;
@@ -126,29 +127,13 @@ class DeltaStarTest {
   @ParameterizedTest
   @ValueSource(ints = {3, 4})
   void smallGrids_comeApart(int side) {
-    Structure grid = grid(side);
+    Structure grid = corners(side);
     Probabilities p = Probabilities.all(0.99);
     Approximation found = Bounds.of(grid).given(p).deltaStar();
     double exact = grid.reliability(p).failing();
     assertTrue(found.replacements() > 0);
     assertEquals(exact, found.value().failing(), 0.5 * exact, found::toString);
     assertTrue(found.certified().contains(grid.reliability(p)));
-  }
-
-  private static Structure grid(int side) {
-    NetworkBuilder grid = Structure.network();
-    for (int row = 0; row < side; row++) {
-      for (int column = 0; column < side; column++) {
-        String here = row + "," + column;
-        if (column + 1 < side) {
-          grid = grid.link("h" + here, here, row + "," + (column + 1));
-        }
-        if (row + 1 < side) {
-          grid = grid.link("v" + here, here, (row + 1) + "," + column);
-        }
-      }
-    }
-    return grid.connecting("0,0", (side - 1) + "," + (side - 1));
   }
 
   @Test
@@ -169,7 +154,7 @@ class DeltaStarTest {
   /** Every node of the complete network of seven has six links; larger grids get stuck, too. */
   @Test
   void networkThatStaysWhole_isRefused() {
-    BoundsAtProbabilities ofGrid = Bounds.of(grid(6)).given(Probabilities.all(0.9));
+    BoundsAtProbabilities ofGrid = Bounds.of(corners(6)).given(Probabilities.all(0.9));
     assertThrows(IllegalArgumentException.class, ofGrid::deltaStar);
     NetworkBuilder complete = Structure.network();
     for (int i = 0; i < 7; i++) {

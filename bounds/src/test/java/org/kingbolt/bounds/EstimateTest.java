@@ -6,6 +6,7 @@ import static org.junit.jupiter.api.Assertions.assertNotEquals;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTimeout;
 import static org.junit.jupiter.api.Assertions.assertTrue;
+import static org.kingbolt.core.published.Families.corners;
 
 import java.time.Duration;
 import java.util.Arrays;
@@ -31,7 +32,7 @@ class EstimateTest {
   /** 100 nodes and 180 links, against the sweep of the whole. */
   @Test
   void rareFailureOfAGrid_isEstimatedToOnePercent() {
-    Structure grid = grid(10);
+    Structure grid = corners(10);
     Probabilities p = failing(1e-4);
     Probability exact = grid.reliability(p);
     Estimate estimate = Bounds.of(grid).given(p).simulate(Simulation.toRelativeError(0.01));
@@ -45,7 +46,7 @@ class EstimateTest {
   /** As the links become perfect no more samples are needed, and every digit is kept. */
   @Test
   void relativeError_staysBounded() {
-    Structure grid = grid(5);
+    Structure grid = corners(5);
     for (double q : new double[] {1e-2, 1e-4, 1e-8, 1e-15}) {
       Probabilities p = failing(q);
       for (Method method : List.of(Method.CONDITIONAL, Method.COVERAGE)) {
@@ -63,7 +64,7 @@ class EstimateTest {
   /** The mirror image: links that hardly ever work, and paths in the place of cuts. */
   @Test
   void rareWorking_isEstimated() {
-    Structure grid = grid(4);
+    Structure grid = corners(4);
     Probabilities p = Probabilities.all(1e-3);
     double exact = grid.reliability(p).working();
     for (Method method : List.of(Method.CONDITIONAL, Method.COVERAGE)) {
@@ -157,7 +158,7 @@ class EstimateTest {
 
   @Test
   void time_endsTheWork_andIsLabelled() {
-    BoundsAtProbabilities bounds = Bounds.of(grid(12)).given(failing(0.01));
+    BoundsAtProbabilities bounds = Bounds.of(corners(12)).given(failing(0.01));
     Simulation simulation = Simulation.ofTime(Duration.ofMillis(300));
     Estimate estimate = assertTimeout(Duration.ofSeconds(20), () -> bounds.simulate(simulation));
     assertFalse(estimate.isReproducible());
@@ -272,21 +273,5 @@ class EstimateTest {
 
   private static Probabilities failing(double q) {
     return Probabilities.all(Probability.failing(q));
-  }
-
-  private static Structure grid(int side) {
-    NetworkBuilder grid = Structure.network();
-    for (int row = 0; row < side; row++) {
-      for (int column = 0; column < side; column++) {
-        String here = row + "," + column;
-        if (column + 1 < side) {
-          grid = grid.link("h" + here, here, row + "," + (column + 1));
-        }
-        if (row + 1 < side) {
-          grid = grid.link("v" + here, here, (row + 1) + "," + column);
-        }
-      }
-    }
-    return grid.connecting("0,0", (side - 1) + "," + (side - 1));
   }
 }

@@ -2,6 +2,7 @@ package org.kingbolt.bounds;
 
 import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertTrue;
+import static org.kingbolt.core.published.Families.corners;
 
 import java.util.ArrayList;
 import java.util.List;
@@ -36,7 +37,7 @@ class SimulationCoverageRateTest {
           .link("5", "b", "t")
           .connecting("s", "t");
 
-  private static final Structure GRID = grid();
+  private static final Structure GRID = corners(4);
 
   /** Too few nodes for the whole, so that a simpler system takes its place. */
   private static final Budget FEW_NODES = Budget.ofNodes(150);
@@ -86,22 +87,5 @@ class SimulationCoverageRateTest {
     double atMostSoMany = counts.cumulativeProbability(held);
     int count = held;
     assertTrue(atMostSoMany > REJECTED, () -> "held " + count + " times in " + SEEDS);
-  }
-
-  /** Four by four nodes, 24 links. */
-  private static Structure grid() {
-    var grid = Structure.network();
-    for (int row = 0; row < 4; row++) {
-      for (int column = 0; column < 4; column++) {
-        String here = row + "," + column;
-        if (column < 3) {
-          grid = grid.link("h" + here, here, row + "," + (column + 1));
-        }
-        if (row < 3) {
-          grid = grid.link("v" + here, here, (row + 1) + "," + column);
-        }
-      }
-    }
-    return grid.connecting("0,0", "3,3");
   }
 }

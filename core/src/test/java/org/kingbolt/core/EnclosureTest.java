@@ -4,6 +4,7 @@ import static org.junit.jupiter.api.Assertions.assertEquals;
 import static org.junit.jupiter.api.Assertions.assertFalse;
 import static org.junit.jupiter.api.Assertions.assertThrows;
 import static org.junit.jupiter.api.Assertions.assertTrue;
+import static org.kingbolt.core.published.Families.corners;
 
 import java.math.BigDecimal;
 import java.time.Duration;
@@ -112,7 +113,7 @@ class EnclosureTest {
 
   @Test
   void smallBudget_endsQuietlyWithAnInterval() {
-    Structure grid = grid(12);
+    Structure grid = corners(12);
     Enclosure enclosure =
         Enclosure.of(grid, Probabilities.all(Probability.failing(0.01)), Budget.ofNodes(100_000));
     while (enclosure.narrow()) {
@@ -128,9 +129,10 @@ class EnclosureTest {
     Budget none = Budget.ofHeap().withTime(Duration.ofNanos(1));
     assertEquals(
         BudgetExceededException.Limit.TIME,
-        assertThrows(BudgetExceededException.class, () -> Enclosure.of(grid(9), p, none).narrow())
+        assertThrows(
+                BudgetExceededException.class, () -> Enclosure.of(corners(9), p, none).narrow())
             .limit());
-    Enclosure interrupted = Enclosure.of(grid(9), p, Budget.ofHeap());
+    Enclosure interrupted = Enclosure.of(corners(9), p, Budget.ofHeap());
     Thread.currentThread().interrupt();
     try {
       assertEquals(
@@ -169,21 +171,5 @@ class EnclosureTest {
     }
     assertTrue(enclosure.isExact());
     assertEquals(chain.reliability(p).failing(), enclosure.upper().failing(), 1e-15);
-  }
-
-  private static Structure grid(int side) {
-    NetworkBuilder grid = Structure.network();
-    for (int row = 0; row < side; row++) {
-      for (int column = 0; column < side; column++) {
-        String here = row + "," + column;
-        if (column + 1 < side) {
-          grid = grid.link("h" + here, here, row + "," + (column + 1));
-        }
-        if (row + 1 < side) {
-          grid = grid.link("v" + here, here, (row + 1) + "," + column);
-        }
-      }
-    }
-    return grid.connecting("0,0", (side - 1) + "," + (side - 1));
   }
 }

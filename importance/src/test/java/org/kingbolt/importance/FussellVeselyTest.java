@@ -22,6 +22,7 @@ import org.kingbolt.core.BudgetExceededException;
 import org.kingbolt.core.MinimalSets;
 import org.kingbolt.core.Probabilities;
 import org.kingbolt.core.Structure;
+import org.kingbolt.core.published.Families;
 import org.kingbolt.core.testing.RandomStructures;
 import org.kingbolt.core.testing.RandomStructures.Sample;
 
@@ -126,23 +127,23 @@ class FussellVeselyTest {
   /** A grid of five by five, whose cut sets are summed one by one. */
   @Test
   void rareEvent_ofAGridIsThatOfItsListedCutSets() {
-    Structure grid = Grids.corners(5);
-    Probabilities p = Probabilities.all(0.97).with("0.0-0.1", 0.9);
+    Structure grid = Families.corners(5);
+    Probabilities p = Probabilities.all(0.97).with("r0c0-r0c1", 0.9);
     MinimalSets cuts = grid.compile().minimalCutSets();
     double all = 0;
     double with = 0;
     for (Set<String> cut : cuts) {
       double probability = cuts.probability(cut, p);
       all += probability;
-      with += cut.contains("0.0-0.1") ? probability : 0;
+      with += cut.contains("r0c0-r0c1") ? probability : 0;
     }
     Ranking ranking = Importance.of(grid).given(p).fussellVeselyRareEvent();
-    assertEquals(with / all, ranking.value("0.0-0.1"), 1e-12);
+    assertEquals(with / all, ranking.value("r0c0-r0c1"), 1e-12);
   }
 
   @Test
   void tooLargeUnions_pointToTheRareEventForm() {
-    ImportanceAtProbabilities at = Importance.of(Grids.corners(6)).given(Probabilities.all(0.9));
+    ImportanceAtProbabilities at = Importance.of(Families.corners(6)).given(Probabilities.all(0.9));
     BudgetExceededException stopped =
         assertThrows(BudgetExceededException.class, () -> at.fussellVesely(Budget.ofNodes(20_000)));
     assertEquals(BudgetExceededException.Limit.NODES, stopped.limit());
@@ -153,7 +154,7 @@ class FussellVeselyTest {
 
   @Test
   void interrupts_endTheWork() {
-    ImportanceAtProbabilities at = Importance.of(Grids.corners(6)).given(Probabilities.all(0.9));
+    ImportanceAtProbabilities at = Importance.of(Families.corners(6)).given(Probabilities.all(0.9));
     Thread.currentThread().interrupt();
     try {
       BudgetExceededException stopped =

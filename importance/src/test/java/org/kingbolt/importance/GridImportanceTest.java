@@ -16,6 +16,7 @@ import org.junit.jupiter.params.provider.ValueSource;
 import org.kingbolt.core.CoherentSystem;
 import org.kingbolt.core.Probabilities;
 import org.kingbolt.core.Probability;
+import org.kingbolt.core.published.Families;
 
 /** Grids, where plain differences lose most digits. */
 class GridImportanceTest {
@@ -24,7 +25,7 @@ class GridImportanceTest {
   @ParameterizedTest
   @ValueSource(doubles = {0.4, 0.6, 0.1, 1e-2, 1e-4, 1e-7})
   void birnbaum_hasEveryDigit(double failing) {
-    CoherentSystem grid = Grids.corners(6).compile();
+    CoherentSystem grid = Families.corners(6).compile();
     Probabilities p = Probabilities.all(Probability.failing(failing));
     double[] exact = grid.evaluation(p).derivatives();
     Ranking ranking = Importance.of(grid).given(p).birnbaum();
@@ -37,10 +38,10 @@ class GridImportanceTest {
   /** J_ij = B_i(1_j) - B_i(0_j), where the two are not nearly equal. */
   @Test
   void jointImportance_isWhatTheOtherChanges() {
-    CoherentSystem grid = Grids.corners(5).compile();
-    Probabilities p = Probabilities.all(0.8).with("2.2-2.3", 0.3);
+    CoherentSystem grid = Families.corners(5).compile();
+    Probabilities p = Probabilities.all(0.8).with("r2c2-r2c3", 0.3);
     JointImportance joint = Importance.of(grid).given(p).jointImportance();
-    for (String given : List.of("0.0-0.1", "2.2-2.3", "3.4-4.4")) {
+    for (String given : List.of("r0c0-r0c1", "r2c2-r2c3", "r3c4-r4c4")) {
       Ranking up = Importance.of(grid).given(p.with(given, Probability.CERTAIN)).birnbaum();
       Ranking down = Importance.of(grid).given(p.with(given, Probability.IMPOSSIBLE)).birnbaum();
       for (String name : grid.components()) {
@@ -55,7 +56,7 @@ class GridImportanceTest {
   /** Sum over pairs of J_ij is half the second derivative of the polynomial in a common p. */
   @Test
   void jointImportance_addsUpToTheCurvature() {
-    CoherentSystem grid = Grids.corners(4).compile();
+    CoherentSystem grid = Families.corners(4).compile();
     double p = 0.7;
     double sum = 0;
     for (double[] row :
@@ -74,16 +75,16 @@ class GridImportanceTest {
 
   @Test
   void barlowProschan_addsUpToOne() {
-    Ranking ranking = Importance.of(Grids.corners(6)).barlowProschan();
+    Ranking ranking = Importance.of(Families.corners(6)).barlowProschan();
     assertEquals(1, ranking.total().orElseThrow(), 1e-13);
   }
 
   /** Same bits and order, whatever the thread; both measures from one object. */
   @Test
   void rankings_areTheSameInAllThreads() throws InterruptedException, ExecutionException {
-    CoherentSystem grid = Grids.corners(5).compile();
+    CoherentSystem grid = Families.corners(5).compile();
     ImportanceAtProbabilities shared = Importance.of(grid).given(Probabilities.all(0.9));
-    String expected = all(Importance.of(Grids.corners(5)).given(Probabilities.all(0.9)));
+    String expected = all(Importance.of(Families.corners(5)).given(Probabilities.all(0.9)));
     ExecutorService threads = Executors.newFixedThreadPool(4);
     try {
       List<Future<String>> results = new ArrayList<>();
@@ -112,12 +113,12 @@ class GridImportanceTest {
   @Test
   @Tag("slow")
   void pairsOfAGridOfTen_takeLessThanAMinute() {
-    CoherentSystem grid = Grids.corners(10).compile();
+    CoherentSystem grid = Families.corners(10).compile();
     long start = System.nanoTime();
     JointImportance joint = Importance.of(grid).given(Probabilities.all(0.97)).jointImportance();
     double seconds = (System.nanoTime() - start) / 1e9;
     assertTrue(seconds < 60, () -> seconds + " s");
     assertEquals(180, joint.components().size());
-    assertTrue(joint.value("0.0-0.1", "0.0-1.0") < -0.99);
+    assertTrue(joint.value("r0c0-r0c1", "r0c0-r1c0") < -0.99);
   }
 }

@@ -24,6 +24,7 @@ import org.kingbolt.core.BudgetExceededException;
 import org.kingbolt.core.Probabilities;
 import org.kingbolt.core.Probability;
 import org.kingbolt.core.Structure;
+import org.kingbolt.core.published.Families;
 import org.kingbolt.core.testing.NestedGates;
 
 class ImprovementPlanTest {
@@ -244,7 +245,7 @@ class ImprovementPlanTest {
   @ParameterizedTest
   @ValueSource(longs = {1, 2, 3})
   void gridOfSixtyLinks_isSolvedToOnePercent(long seed) {
-    checkOnePercent(Grids.corners(6), seed);
+    checkOnePercent(Families.corners(6), seed);
   }
 
   private static void checkOnePercent(Structure structure, long seed) {

@@ -20,6 +20,7 @@ import org.kingbolt.core.BudgetExceededException;
 import org.kingbolt.core.Probabilities;
 import org.kingbolt.core.Probability;
 import org.kingbolt.core.Structure;
+import org.kingbolt.core.published.Families;
 import org.kingbolt.core.testing.RandomStructures;
 import org.kingbolt.core.testing.RandomStructures.Sample;
 
@@ -199,7 +200,7 @@ class JointImportanceTest {
         assertThrows(
             BudgetExceededException.class,
             () ->
-                Importance.of(Grids.corners(5))
+                Importance.of(Families.corners(5))
                     .given(Probabilities.all(0.9))
                     .jointImportance(Budget.ofNodes(100)));
     assertEquals(BudgetExceededException.Limit.NODES, stopped.limit());

@@ -20,6 +20,7 @@ import org.kingbolt.core.CoherentSystem;
 import org.kingbolt.core.Probabilities;
 import org.kingbolt.core.Probability;
 import org.kingbolt.core.Structure;
+import org.kingbolt.core.published.Families;
 import org.kingbolt.core.testing.Close;
 import org.kingbolt.core.testing.RandomStructures;
 import org.kingbolt.core.testing.RandomStructures.Sample;
@@ -90,7 +91,7 @@ class SensitivityTest {
   /** All components together: the reliability polynomial. */
   @Test
   void wholeSystem_givesItsPolynomial() {
-    CoherentSystem bridge = Grids.corners(3).compile();
+    CoherentSystem bridge = Families.corners(3).compile();
     ReliabilityCurve curve =
         Sensitivity.of(bridge).given(Probabilities.all(0.5)).along(bridge.components());
     double[] coefficients = curve.coefficients();

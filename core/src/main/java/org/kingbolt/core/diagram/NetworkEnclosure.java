@@ -123,7 +123,7 @@ final class NetworkEnclosure {
   }
 
   private void sweep(long most, WorkMeter meter) {
-    FrontierPlan known = plan();
+    FrontierPlan known = plan;
     if (known == null) {
       known = new FrontierPlan(network, meter);
       plan = known;
@@ -168,10 +168,6 @@ final class NetworkEnclosure {
     return changes;
   }
 
-  private @Nullable FrontierPlan plan() {
-    return plan;
-  }
-
   private static int otherwise(boolean lessWorking) {
     return lessWorking ? StateRule.SETTLED_FAILS : StateRule.SETTLED_WORKS;
   }
@@ -184,10 +180,7 @@ final class NetworkEnclosure {
     boolean again = growth.step(most, meter);
     improve(Means.EXCERPT, growth.mostFails(), growth.leastFails());
     idle = growth.gap() > IDLE * before ? idle + 1 : 0;
-    if (idle == IDLE_STEPS) {
-      return false;
-    }
-    return again;
+    return again && idle < IDLE_STEPS;
   }
 
   /**
@@ -216,7 +209,7 @@ final class NetworkEnclosure {
         yield composer.network(excerpt, dual, parts, meter);
       }
       default -> {
-        FrontierPlan known = plan();
+        FrontierPlan known = plan;
         if (known == null) {
           throw new AssertionError("there is no plan");
         }

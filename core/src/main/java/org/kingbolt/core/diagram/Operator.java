@@ -107,8 +107,8 @@ public abstract class Operator {
     }
   }
 
-  private static final class Swept extends Operator {
-    private final StateRule rule;
+  private static class Swept extends Operator {
+    final StateRule rule;
 
     Swept(StateRule rule) {
       this.rule = rule;
@@ -140,34 +140,18 @@ public abstract class Operator {
     }
   }
 
-  private static final class Likely extends Operator {
-    private final StateRule rule;
+  private static final class Likely extends Swept {
     private final double[] works;
     private final double[] fails;
     private final int most;
     private final int otherwise;
 
     Likely(StateRule rule, double[] works, double[] fails, int most, int otherwise) {
-      this.rule = rule;
+      super(rule);
       this.works = works;
       this.fails = fails;
       this.most = most;
       this.otherwise = otherwise;
-    }
-
-    @Override
-    int levels() {
-      return rule.steps();
-    }
-
-    @Override
-    int slotAt(int level) {
-      return rule.slot(level);
-    }
-
-    @Override
-    boolean isReduced() {
-      return false;
     }
 
     /** What is followed after one slot has failed may be cut off after it has worked. */

@@ -3,9 +3,10 @@ package org.kingbolt.core.published;
 import java.util.ArrayList;
 import java.util.List;
 import java.util.stream.IntStream;
+import org.kingbolt.core.Structure;
 
 /** Networks that come in families, and the well-known single graphs, from their definitions. */
-final class Families {
+public final class Families {
 
   private Families() {}
 
@@ -28,6 +29,11 @@ final class Families {
       }
     }
     return Topology.ofPairs(pairs);
+  }
+
+  /** A square grid of so many nodes a side, connecting two opposite corners. */
+  public static Structure corners(int side) {
+    return grid(side, side).connecting(cell(0, 0), cell(side - 1, side - 1));
   }
 
   static String cell(int row, int column) {
